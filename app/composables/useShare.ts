@@ -1,0 +1,45 @@
+import { useDebounceFn } from '@vueuse/core';
+
+/**
+ * The page's address holds the drawing. It follows what is typed once the typing rests, and opening one draws it; an
+ * address that cannot be read says so and leaves the first drawing.
+ */
+export function useShare() {
+  const slot = useSlotStore();
+  const { announce } = useSaying();
+  const damaged = ref(false);
+  const copied = ref(false);
+  const REST_MS = 400; // browsers limit how often an address may be rewritten
+
+  function open(): void {
+    const { hash } = window.location;
+    // Places on the page have names without a dot; only a drawing has a version before one.
+    if (!hash.includes('.')) return;
+    const draft = draftFrom(hash);
+    damaged.value = draft === null;
+    if (draft && hash !== linkOf(slot.draft)) slot.load(draft);
+  }
+  const write = useDebounceFn(() => {
+    window.history.replaceState(window.history.state, '', linkOf(slot.draft));
+  }, REST_MS);
+
+  onMounted(() => {
+    open();
+    window.addEventListener('hashchange', open);
+    watch(() => slot.draft, () => {
+      damaged.value = false;
+      copied.value = false;
+      void write();
+    });
+  });
+  onUnmounted(() => window.removeEventListener('hashchange', open));
+
+  async function share(): Promise<void> {
+    const url = new URL(window.location.href);
+    url.hash = linkOf(slot.draft);
+    copied.value = await copyText(url.href);
+    if (!copied.value) window.history.replaceState(window.history.state, '', url.hash);
+    announce(copied.value ? 'Link copied.' : 'The link stands in the address bar.');
+  }
+  return { damaged, copied, share };
+}

@@ -1,0 +1,3 @@
+export function sourcesHash(): string;
+export function isBuilt(): boolean;
+export function buildIfChanged(): Promise<void>;

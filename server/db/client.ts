@@ -1,0 +1,41 @@
+import { mkdirSync } from 'node:fs';
+import { join } from 'node:path';
+import SQLite from 'better-sqlite3';
+import { drizzle } from 'drizzle-orm/better-sqlite3';
+import type { MigrationMeta } from 'drizzle-orm/migrator';
+import * as schema from './schema';
+
+/** Opens the one file in a folder and brings it to today's schema. This module alone names the driver. */
+export function openDatabase(folder: string, migrations: readonly MigrationMeta[]) {
+  mkdirSync(folder, { recursive: true, mode: 0o700 });
+  const file = new SQLite(join(folder, 'tallyrail.sqlite'));
+  file.pragma('journal_mode = WAL'); // readers never wait for a writer
+  file.pragma('synchronous = NORMAL'); // with WAL, safe when we crash; a power cut may lose the last moments
+  file.pragma('busy_timeout = 5000'); // ms; a backup may hold the file for a moment
+  applyMigrations(file, migrations);
+  file.pragma('foreign_keys = ON');
+  return { database: drizzle(file, { schema }), close: () => file.close() };
+}
+
+export type ShopDatabase = ReturnType<typeof openDatabase>['database'];
+
+/**
+ * Applies what is new, all of it or none, and keeps account in the table Drizzle's own migrator uses. That one reads
+ * a folder, and a built server has none: its migrations are part of it (nuxt.config.ts).
+ */
+function applyMigrations(file: SQLite.Database, migrations: readonly MigrationMeta[]): void {
+  file.pragma('foreign_keys = OFF'); // a table that is rebuilt is dropped for a moment
+  file.exec('CREATE TABLE IF NOT EXISTS __drizzle_migrations (id INTEGER PRIMARY KEY, hash text NOT NULL, created_at numeric)');
+  const newest = file.prepare('SELECT max(created_at) FROM __drizzle_migrations').pluck();
+  const note = file.prepare('INSERT INTO __drizzle_migrations (hash, created_at) VALUES (?, ?)');
+  const applyAll = file.transaction(() => {
+    const done = Number(newest.get() ?? 0);
+    for (const { sql, hash, folderMillis } of migrations.filter((migration) => migration.folderMillis > done)) {
+      for (const statement of sql) file.exec(statement);
+      note.run(hash, folderMillis);
+    }
+    const [broken] = file.pragma('foreign_key_check') as unknown[];
+    if (broken) throw new Error(`A migration left a row that points nowhere: ${JSON.stringify(broken)}`);
+  });
+  applyAll.immediate(); // two servers started at once: the second waits, then finds nothing to do
+}

@@ -1,0 +1,124 @@
+import { assert } from './assert';
+import { convertLength } from './measure/units';
+import { GRID } from './program/grid';
+import { markIn, programMark, sha256Hex } from './program/mark';
+import { programFileName, writeProgram } from './program/write';
+import { type ReadProgram, type Step, readProgram } from './reader';
+import { stepsIn } from './reader/inUnits';
+import type { Readback } from './readback/finding';
+import { readBack, unreadable } from './readback/readBack';
+import { sentenceOf } from './readback/sentences';
+import { type ChipLoadBand, advisedChipLoad, chipLoad } from './slot/chipLoad';
+import type { SlotPath } from './slot/path';
+import { planSlot } from './slot/plan';
+import type { SlotRequest } from './slot/request';
+import { type SlotSpec, railLength } from './slot/spec';
+import { type Timeline, defaultDynamics, timeAssumes, timeOf } from './time';
+
+/** What a page or a sheet shows beside the program; lengths in the spec's units, times in seconds. */
+export interface ProgramSummary {
+  readonly railLength: number;
+  /** Depth reached by each pass. */
+  readonly passes: readonly number[];
+  /** Of the whole program, with acceleration, corners and spin-up. */
+  readonly seconds: number;
+  /** What the time took for granted, in words. */
+  readonly timeAssumes: string;
+  readonly cutLength: number;
+  readonly rapidLength: number;
+  readonly lines: number;
+  readonly chipLoad: number;
+  readonly chipLoadRange: ChipLoadBand;
+  /** ft/min or m/min at the bit's edge. */
+  readonly surfaceSpeed: number;
+  /** in³/min or cm³/min at the bit's full width and the stepdown. */
+  readonly removalRate: number;
+  readonly assumed: readonly (keyof SlotSpec)[];
+  readonly notes: readonly string[];
+}
+
+/** What every made program has, fit for download or not. */
+interface Made {
+  readonly spec: SlotSpec;
+  readonly summary: ProgramSummary;
+  readonly readback: Readback;
+  /** What the reader saw, in the spec's units: for playback. */
+  readonly steps: readonly Step[];
+  readonly timeline: Timeline;
+}
+
+/** A program that has been read back: with its text only where no reading disagrees. */
+export type MadeProgram =
+  | (Made & {
+      readonly ok: true;
+      readonly program: string;
+      readonly fileName: string;
+      readonly mark: string;
+      /** Hex, of the text's bytes. */
+      readonly sha256: string;
+    })
+  | (Made & { readonly ok: false });
+
+/**
+ * From a slot request to a program that has been read back: plan, write, read, measure.
+ *
+ * A draft is read first, since only a reading can tell the time and the cautions that the header bears; then the
+ * final text is read and measured by itself, and only what it says counts.
+ *
+ * @returns the text only if no reading disagrees.
+ */
+export function makeProgram(request: SlotRequest): MadeProgram {
+  const { spec, options } = request;
+  const units = options.programUnits ?? spec.units;
+  const path = planSlot(spec, convertLength(GRID[units], units, spec.units));
+
+  const draft = measure(writeProgram(request, path, null), request);
+  const cautions = draft.readback.findings.flatMap((finding) => sentenceOf(finding, spec.units).header ?? []);
+  const program = writeProgram(request, path, { seconds: draft.timeline.seconds, cautions });
+  const final = measure(program, request);
+
+  const made = { spec, summary: summarise(request, path, final), readback: final.readback, steps: final.steps, timeline: final.timeline };
+  if (final.readback.verdict === 'disagrees') return { ok: false, ...made };
+  const mark = programMark(program);
+  assert(!options.comments || markIn(program) === mark, 'the text bears its own mark');
+  return { ok: true, program, fileName: programFileName(spec, mark, options.fileEnding), mark, sha256: sha256Hex(program), ...made };
+}
+
+interface Measured {
+  readonly readback: Readback;
+  readonly steps: readonly Step[];
+  readonly timeline: Timeline;
+  readonly lines: number;
+}
+
+function measure(text: string, { spec, options, assumed }: SlotRequest): Measured {
+  const read = readProgram(text, { dwellIn: options.spindleWait === 'milliseconds' ? 'milliseconds' : 'seconds' });
+  const program: ReadProgram | null = read.ok ? read.program : null;
+  const steps = program ? stepsIn(spec.units, program) : [];
+  return {
+    readback: read.ok ? readBack(read.program, spec, assumed.includes('railWidth')) : unreadable(read.error),
+    steps,
+    timeline: timeOf(steps, defaultDynamics(spec.units, spec.machine)),
+    lines: program?.lines ?? 0,
+  };
+}
+
+function summarise({ spec, assumed, notes }: SlotRequest, path: SlotPath, { timeline, lines }: Measured): ProgramSummary {
+  const edge = Math.PI * spec.bitDiameter * spec.spindleSpeed;
+  const rate = spec.bitDiameter * spec.stepdown * spec.feed;
+  return {
+    railLength: railLength(spec),
+    passes: path.levels,
+    seconds: timeline.seconds,
+    timeAssumes: timeAssumes(spec.units, spec.machine, timeline),
+    cutLength: timeline.cutLength,
+    rapidLength: timeline.rapidLength,
+    lines,
+    chipLoad: chipLoad(spec),
+    chipLoadRange: advisedChipLoad(spec),
+    surfaceSpeed: spec.units === 'in' ? edge / 12 : edge / 1000,
+    removalRate: spec.units === 'in' ? rate : rate / 1000,
+    assumed,
+    notes,
+  };
+}

@@ -1,0 +1,102 @@
+import type { Point3 } from '../../geometry/point';
+import type { Motion } from '../../reader/motion';
+import { isOneBit } from '../../slot/spec';
+import type { Cut } from '../cut';
+import { deepestCut } from '../depthOfCut';
+import type { Finding } from '../finding';
+import { type Rule, finding } from './rule';
+
+/** Depth of one pass against the stepdown, and of the finish lap against the bit's cutting length. */
+export function depthsOfCut(cut: Cut): Finding[] {
+  const { spec, tolerance } = cut;
+  const radius = spec.bitDiameter / 2;
+  const full = deepestCut(cut.pieces, radius, spec.finishAllowance + tolerance);
+  const any = spec.finishAllowance > 0 ? deepestCut(cut.pieces, radius, tolerance) : full;
+  const at = (deepest: typeof full) => deepest.piece?.motion.at ?? cut.whole;
+  const passes = finding('passDepth', full.depth <= spec.stepdown + tolerance ? 'agrees' : 'disagrees', 'length', at(full), {
+    wanted: spec.stepdown, measured: full.depth, point: full.point,
+  });
+  const tooTall = any.depth > spec.cuttingLength + tolerance;
+  const shankInSlot = spec.depth > spec.cuttingLength + tolerance;
+  const edges = finding('cuttingLength', tooTall ? 'disagrees' : shankInSlot ? 'caution' : 'agrees', 'length', at(any), {
+    wanted: spec.cuttingLength,
+    measured: tooTall ? any.depth : Math.max(any.depth, spec.depth),
+    point: any.point,
+    reason: !tooTall && shankInSlot ? 'shank' : null,
+  });
+  return [passes, edges];
+}
+
+/** Length of a motion in plan; of an arc along the arc. */
+function planLength({ arc, from, to }: Motion): number {
+  return arc ? arc.radius * arc.sweep : Math.hypot(to.x - from.x, to.y - from.y);
+}
+
+/** Cutting motions that go down in the wood, and how far below the top. */
+function descents({ motions }: Cut): { motion: Motion; into: number; along: number }[] {
+  return motions.flatMap((motion) => {
+    const { from, to, kind } = motion;
+    if (kind === 'rapid' || !(to.z < from.z) || to.z >= 0) return [];
+    return [{ motion, into: Math.min(from.z, 0) - to.z, along: planLength(motion) }];
+  });
+}
+
+/** Steepest way into the wood. Straight down is for bits that cut at their centre, and a caution even then. */
+export const entry: Rule = (cut) => {
+  const { spec } = cut;
+  const slope = Math.tan((spec.rampAngle * Math.PI) / 180);
+  let steepest = 0;
+  let worst: Motion | null = null;
+  let plunge: Motion | null = null;
+  for (const { motion, into, along } of descents(cut)) {
+    if (along === 0) {
+      plunge ??= motion;
+      continue;
+    }
+    // Depths are written in whole steps of the last decimal, so a ramp may stand one step steeper than it was meant.
+    const fall = motion.from.z > 0 ? motion.from.z - motion.to.z : into;
+    const angle = (Math.atan2(Math.max(0, fall - cut.step), along) * 180) / Math.PI;
+    if (angle > steepest) [steepest, worst] = [angle, motion];
+  }
+  const point = (motion: Motion | null): Point3 | null => motion && motion.to;
+  if (plunge && Math.atan(slope) * (180 / Math.PI) + 1e-6 >= steepest) {
+    return finding('entry', spec.centreCutting ? 'caution' : 'disagrees', 'angle', plunge.at, {
+      wanted: spec.rampAngle, measured: 90, point: point(plunge), reason: spec.centreCutting ? 'plunge' : 'plungeWithoutCentre',
+    });
+  }
+  return finding('entry', steepest <= spec.rampAngle + 1e-6 ? 'agrees' : 'disagrees', 'angle', worst?.at ?? cut.whole, {
+    wanted: spec.rampAngle, measured: steepest, point: point(worst),
+  });
+};
+
+/** Which way the long sides are cut, with the spindle clockwise: rightwards in front and leftwards behind climbs. */
+export const laps: Rule = (cut) => {
+  const { spec, tolerance } = cut;
+  if (isOneBit(spec)) return null;
+  const middle = spec.railWidth / 2;
+  const wall = (spec.width - spec.bitDiameter) / 2;
+  const long = cut.pieces.filter((p) => p.y0 === p.y1 && Math.abs(p.x1 - p.x0) > spec.bitDiameter && Math.abs(p.y0 - middle) > 2 * cut.step);
+  let wrong = null;
+  const senses = { climb: 0, conventional: 0 };
+  for (const piece of long) {
+    const sense = (piece.x1 > piece.x0) === (piece.y0 < middle) ? 'climb' : 'conventional';
+    const finishing = spec.finishAllowance > tolerance && Math.abs(piece.y0 - middle) > wall - tolerance;
+    senses[sense] += 1;
+    if (sense !== (finishing ? 'climb' : spec.direction)) wrong ??= piece;
+  }
+  if (long.length === 0) return null;
+  const measured = senses.climb === 0 ? 'conventional' : senses.conventional === 0 ? 'climb' : 'both ways';
+  const wanted = spec.finishAllowance > 0 && spec.direction === 'conventional' ? 'both ways' : spec.direction;
+  return finding('laps', wrong ? 'disagrees' : 'agrees', 'words', (wrong ?? long[0])?.motion.at ?? cut.whole, {
+    wanted, measured, point: wrong && { x: wrong.x1, y: wrong.y1, z: wrong.z1 },
+  });
+};
+
+/** Times that the bit leaves the wood. */
+export const retracts: Rule = (cut) => {
+  const leaving = cut.motions.filter(({ from, to }) => from.z < 0 && to.z >= 0);
+  const last = leaving[leaving.length - 1];
+  return finding('retracts', leaving.length === 1 ? 'agrees' : 'disagrees', 'count', last?.at ?? cut.whole, {
+    wanted: 1, measured: leaving.length, point: last?.to ?? null,
+  });
+};
