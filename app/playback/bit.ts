@@ -9,15 +9,18 @@ import { STEEL_FRAGMENT, STEEL_VERTEX } from './shaders';
 /** Lead of a spiral flute: one turn in this many diameters stands at about 30°, as router bits are ground. */
 const LEAD = 5.4;
 /** Depth of a flute, share of the radius. */
-const GULLET = 0.42;
+const GULLET = 0.36;
+/** Share of the turn that a land takes. */
+const LAND = 0.42;
 const AROUND = 60;
 const UP = 48;
 
-/** The bit in its nut and spindle, its end at the group's origin, Z along its axis. `turning` spins; the rest does not. */
-export function bitGroup(sizes: StageSizes, spec: Pick<SlotSpec, 'flutes' | 'bitKind'>, palette: Palette, screen: Screen): { readonly group: Group; readonly turning: Group } {
+/** The bit in its nut and spindle, its end at the group's origin, Z along its axis. `turning` spins; the nut is drawn still, because its six sides would flicker. */
+export function bitGroup(sizes: StageSizes, spec: Pick<SlotSpec, 'flutes' | 'bitKind'>, palette: Palette, screen: Screen): { readonly group: Group; readonly turning: Group; readonly holder: Group } {
   const group = new Group();
   const turning = new Group();
-  group.add(turning);
+  const holder = new Group();
+  group.add(turning, holder);
   const radius = sizes.bitDiameter / 2;
   const nut = sizes.colletDiameter / 2;
   const ink = [palette.ink, palette.ink, palette.ink] as const;
@@ -30,12 +33,12 @@ export function bitGroup(sizes: StageSizes, spec: Pick<SlotSpec, 'flutes' | 'bit
   add(turning, upright(radius, radius, sizes.cuttingLength, sizes.stickout, 40), tones.shank);
   // The nut: a cone, a six-sided body, and the spindle's nose above it.
   const top = sizes.stickout;
-  add(turning, upright(nut * 0.6, nut * 0.94, top, top + nut * 0.35, 40), tones.nut);
+  add(holder, upright(nut * 0.6, nut * 0.94, top, top + nut * 0.35, 40), tones.nut);
   const body = () => upright(nut, nut, top + nut * 0.35, top + nut * 1.25, 6);
-  turning.add(solid(faceted(body()), tones.nut, screen, 0));
-  turning.add(solid(body(), ink, screen, 1.5)); // the outline needs the round normals, or it tears at the corners
-  add(group, upright(nut * 0.86, nut * 0.86, top + nut * 1.25, top + nut * 1.9, 40), tones.steel);
-  return { group, turning };
+  holder.add(solid(faceted(body()), tones.nut, screen, 0));
+  holder.add(solid(body(), ink, screen, 1.5)); // the outline needs the round normals, or it tears at the corners
+  add(holder, upright(nut * 0.86, nut * 0.86, top + nut * 1.25, top + nut * 1.9, 40), tones.steel);
+  return { group, turning, holder };
 }
 
 type Tones = readonly [base: Color, hi: Color, lo: Color];
@@ -86,7 +89,7 @@ function flutesGeometry(radius: number, length: number, flutes: number, kind: Sl
     for (let k = 0; k < AROUND; k++) {
       const angle = (2 * Math.PI * k) / AROUND;
       const share = ((k * flutes) / AROUND) % 1;
-      const gullet = share < 0.3 ? 0 : Math.sin((Math.PI * (share - 0.3)) / 0.7) ** 0.6;
+      const gullet = share < LAND ? 0 : Math.sin((Math.PI * (share - LAND)) / (1 - LAND)) ** 0.6;
       const r = radius * (1 - GULLET * gullet * runOut);
       const turned = angle + twistAt(height, radius, length, kind);
       position.push(r * Math.cos(turned), r * Math.sin(turned), height);

@@ -1,10 +1,10 @@
-import { PerspectiveCamera, Vector3 } from 'three';
+import { type PerspectiveCamera, Vector3 } from 'three';
 import type { Box } from '#shared/playback/index';
 import type { View } from './views';
 
 /** From the middle of what is looked at to the eye. */
 const TOWARD: Readonly<Record<View, readonly [number, number, number]>> = {
-  corner: [-0.9, -0.5, 0.5],
+  corner: [-0.85, -0.6, 0.42],
   above: [0, -0.001, 1], // not straight down: the camera would not know which way is up
   front: [0, -1, 0.16],
   end: [-1, -0.12, 0.42],
@@ -13,35 +13,44 @@ const TOWARD: Readonly<Record<View, readonly [number, number, number]>> = {
 
 const corners = ({ x0, x1, y0, y1, z0, z1 }: Box): Vector3[] => [x0, x1].flatMap((x) => [y0, y1].flatMap((y) => [z0, z1].map((z) => new Vector3(x, y, z))));
 
+const TALL_CORNER = [-0.92, -0.3, 0.5] as const;
+
+/** Degrees of the picture's height: flat for the views a drawing has, deep for those one looks along the rail in. */
+const LENS: Readonly<Record<View, number>> = { corner: 38, above: 12, front: 12, end: 30, bit: 26 };
+
 /** Places the camera so that the whole box is in the picture with a margin; answers what it looks at. */
-export function frame(camera: PerspectiveCamera, box: Box, view: View, margin = 0.08): Vector3 {
-  const target = new Vector3((box.x0 + box.x1) / 2, (box.y0 + box.y1) / 2, (box.z0 + box.z1) / 2);
-  const toward = new Vector3(...TOWARD[view]).normalize();
-  const points = corners(box);
-  let far = Math.max(box.x1 - box.x0, box.y1 - box.y0, box.z1 - box.z0) * 2;
-  const right = new Vector3();
-  const up = new Vector3();
-  // Perspective makes the near end larger than the far one, so middle and distance are found together, by turns.
-  for (let round = 0; round < 24; round++) {
-    camera.position.copy(target).addScaledVector(toward, far);
-    camera.lookAt(target);
-    camera.updateMatrixWorld();
-    let [left, rightmost, low, high] = [Infinity, -Infinity, Infinity, -Infinity];
-    for (const point of points) {
-      const seen = point.clone().project(camera);
-      [left, rightmost, low, high] = [Math.min(left, seen.x), Math.max(rightmost, seen.x), Math.min(low, seen.y), Math.max(high, seen.y)];
-    }
-    const tall = Math.tan((camera.fov * Math.PI) / 360) * far;
-    right.setFromMatrixColumn(camera.matrixWorld, 0);
-    up.setFromMatrixColumn(camera.matrixWorld, 1);
-    target.addScaledVector(right, ((left + rightmost) / 2) * tall * camera.aspect * 0.7).addScaledVector(up, ((low + high) / 2) * tall * 0.7);
-    const fill = Math.max((rightmost - left) / 2, (high - low) / 2) / (1 - margin);
-    // Nearer than this a corner would pass behind the eye.
-    const nearest = Math.max(...points.map((point) => point.clone().sub(target).dot(toward))) * 1.05;
-    far = Math.max(nearest, far * (1 + (fill - 1) * 0.6));
+export function frame(camera: PerspectiveCamera, box: Box, view: View, margin = 0.07): Vector3 {
+  // In a tall picture one looks further along the rail, or it would be a stick across the middle.
+  const toward = new Vector3(...(view === 'corner' && camera.aspect < 1.2 ? TALL_CORNER : TOWARD[view])).normalize();
+  const right = new Vector3().crossVectors(camera.up, toward).normalize();
+  const up = new Vector3().crossVectors(toward, right);
+  const middle = new Vector3((box.x0 + box.x1) / 2, (box.y0 + box.y1) / 2, (box.z0 + box.z1) / 2);
+  // Each corner from the middle of the box: across the picture, up it, and towards the eye.
+  const points = corners(box).map((corner) => corner.sub(middle)).map((p) => [p.dot(right), p.dot(up), p.dot(toward)] as const);
+  const nearest = Math.max(...points.map(([, , near]) => near));
+  camera.fov = LENS[view];
+  const tall = Math.tan((camera.fov * Math.PI) / 360) * (1 - margin);
+  const wide = tall * camera.aspect;
+
+  // From a distance: the least and greatest place in the picture that keeps every corner in, across and up.
+  const room = (far: number, axis: 0 | 1, half: number) => {
+    const least = Math.max(...points.map((p) => p[axis] - half * (far - p[2])));
+    const most = Math.min(...points.map((p) => p[axis] + half * (far - p[2])));
+    return { middle: (least + most) / 2, spare: most - least };
+  };
+  // The nearest distance with room both ways, by halving: farther always has more.
+  let near = nearest;
+  let far = nearest + 4 * Math.max(...points.flatMap(([x, y, z]) => [Math.abs(x) / wide, Math.abs(y) / tall, Math.abs(z)]));
+  for (let round = 0; round < 40; round++) {
+    const half = (near + far) / 2;
+    if (room(half, 0, wide).spare >= 0 && room(half, 1, tall).spare >= 0) far = half;
+    else near = half;
   }
-  camera.near = far / 200;
-  camera.far = far * 20;
+  const target = middle.clone().addScaledVector(right, room(far, 0, wide).middle).addScaledVector(up, room(far, 1, tall).middle);
+  camera.position.copy(target).addScaledVector(toward, far);
+  camera.near = Math.max((far - nearest) / 20, far / 500);
+  camera.far = far * 12;
+  camera.lookAt(target);
   camera.updateProjectionMatrix();
   return target;
 }

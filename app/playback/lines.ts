@@ -1,5 +1,5 @@
-import { BufferGeometry, Float32BufferAttribute, GreaterDepth, Group, InstancedBufferAttribute, InstancedBufferGeometry, LessEqualDepth, Mesh, ShaderMaterial } from 'three';
-import type { Color, IUniform, Vector2 } from 'three';
+import { Float32BufferAttribute, GreaterDepth, Group, InstancedBufferAttribute, InstancedBufferGeometry, LessEqualDepth, Mesh, ShaderMaterial } from 'three';
+import type { Color, IUniform, Vector2, BufferGeometry } from 'three';
 import type { Box, Segments } from '#shared/playback/index';
 import { LINE_FRAGMENT, LINE_VERTEX } from './shaders';
 
@@ -20,10 +20,44 @@ export interface LineLook {
   readonly hidden?: boolean;
   readonly travel: IUniform<number>;
   readonly order: number;
+  /** Share of its distance that it is drawn nearer, to lie on what it lies on; edges more than the path inside the wood. */
+  readonly lift?: number;
+  /** Leaves out what the section takes away. */
+  readonly section?: IUniform<boolean>;
+  readonly middle?: number;
+  /** The wood's depths, for a line whose height follows them. */
+  readonly field?: Record<string, IUniform>;
 }
 
-/** One quad for each piece of line; the pieces come from the segments without a copy per look. */
-export function lineGeometry({ count, ends, travel, rapid }: Segments): InstancedBufferGeometry {
+/**
+ * Cuts long pieces up. A line that runs the length of the rail is a sliver thousands of times longer than wide, and in a
+ * near view the card's depth along such a one is off by more than the line lies over the wood.
+ */
+function cutUp({ count, ends, travel, rapid }: Segments, longest: number): Segments {
+  const parts = Array.from({ length: count }, (_, i) => Math.max(1, Math.ceil(Math.hypot(...[0, 1, 2].map((k) => (ends[i * 6 + 3 + k] ?? 0) - (ends[i * 6 + k] ?? 0))) / longest)));
+  const total = parts.reduce((sum, n) => sum + n, 0);
+  const cut = { count: total, ends: new Float64Array(total * 6), travel: new Float64Array(total * 2), rapid: new Uint8Array(total) };
+  const between = (of: Float64Array, from: number, step: number, share: number) => (of[from] ?? 0) + ((of[from + step] ?? 0) - (of[from] ?? 0)) * share;
+  let at = 0;
+  parts.forEach((n, i) => {
+    for (let part = 0; part < n; part++, at++) {
+      for (const end of [0, 1] as const) {
+        const share = (part + end) / n;
+        for (let k = 0; k < 3; k++) cut.ends[at * 6 + end * 3 + k] = between(ends, i * 6 + k, 3, share);
+        cut.travel[at * 2 + end] = between(travel, i * 2, 1, share);
+      }
+      cut.rapid[at] = rapid[i] ?? 0;
+    }
+  });
+  return cut;
+}
+
+/** Long enough that a rail's edge is a few dozen pieces. */
+export const pieceOf = ({ x0, x1 }: Box): number => (x1 - x0) / 32;
+
+/** One quad for each piece of line; every look at it shares them. */
+export function lineGeometry(segments: Segments, longest: number): InstancedBufferGeometry {
+  const { count, ends, travel, rapid } = cutUp(segments, longest);
   const geometry = new InstancedBufferGeometry();
   geometry.setAttribute('position', new Float32BufferAttribute([0, -0.5, 0, 1, -0.5, 0, 1, 0.5, 0, 0, 0.5, 0], 3));
   geometry.setIndex([0, 1, 2, 0, 2, 3]);
@@ -55,7 +89,12 @@ export function lineMesh(geometry: BufferGeometry, screen: Screen, look: LineLoo
       uRapidColour: { value: look.rapidColour ?? look.colour },
       uOpacity: { value: look.opacity ?? 1 },
       uTravel: look.travel,
+      uLift: { value: look.lift ?? 0.001 },
+      uSection: look.section ?? { value: false },
+      uMiddle: { value: look.middle ?? 0 },
+      ...look.field,
     },
+    ...(look.field ? { defines: { PROFILE: '' } } : {}),
   });
   const mesh = new Mesh(geometry, material);
   mesh.frustumCulled = false;
@@ -66,10 +105,10 @@ export function lineMesh(geometry: BufferGeometry, screen: Screen, look: LineLoo
 /** A straight line of any two places, as lines are kept. */
 type Line = readonly [number, number, number, number, number, number];
 
-/** The twelve edges of a box; `from` its front, so that a section can have those of its back half alone. */
-export function boxEdges({ x0, x1, y1, z0, z1 }: Box, y0: number): Line[] {
+/** The edges of a box from `y0` back: a section has those of the back half, and its own line along the front of the top. */
+export function boxEdges({ x0, x1, y1, z0, z1 }: Box, y0: number, topFront = true): Line[] {
   const edges: Line[] = [];
-  for (const y of [y0, y1]) for (const z of [z0, z1]) edges.push([x0, y, z, x1, y, z]);
+  for (const y of [y0, y1]) for (const z of [z0, z1]) if (topFront || y !== y0 || z !== z1) edges.push([x0, y, z, x1, y, z]);
   for (const x of [x0, x1]) for (const z of [z0, z1]) edges.push([x, y0, z, x, y1, z]);
   for (const x of [x0, x1]) for (const y of [y0, y1]) edges.push([x, y, z0, x, y, z1]);
   return edges;
@@ -81,12 +120,21 @@ export function asSegments(lines: readonly Line[]): Segments {
   return { count: lines.length, ends: Float64Array.from(lines.flat()), travel, rapid: new Uint8Array(lines.length) };
 }
 
+/** The edge of the section: along the top, down into the cut and up again, as deep as it is at the moment. */
+export function profileLine(line: readonly { readonly x: number; readonly crossing: number }[], y: number, z: number, screen: Screen, look: LineLook): Mesh {
+  const pairs = line.slice(1).map((to, i) => [line[i] ?? to, to] as const);
+  const geometry = lineGeometry(asSegments(pairs.map(([from, to]) => [from.x, y, z, to.x, y, z])), Infinity);
+  geometry.setAttribute('aCrossings', new InstancedBufferAttribute(Float32Array.from(pairs.flatMap(([from, to]) => [from.crossing, to.crossing])), 2));
+  return lineMesh(geometry, screen, look);
+}
+
 /** The path: over the wood in full, through it faintly; over a pale casing on dark woods. */
-export function pathLines(segments: Segments, screen: Screen, travel: IUniform<number>, look: { crayon: Color; rapid: Color; casing: Color | null }): Group {
-  const geometry = lineGeometry(segments);
+export function pathLines(segments: Segments, screen: Screen, longest: number, colours: { crayon: Color; rapid: Color; casing: Color | null }, shared: Pick<LineLook, 'travel' | 'section' | 'middle'>): Group {
+  const geometry = lineGeometry(segments, longest);
   const group = new Group();
-  if (look.casing) group.add(lineMesh(geometry, screen, { colour: look.casing, width: 5.5, travel, order: 10, opacity: 0.9 }));
-  group.add(lineMesh(geometry, screen, { colour: look.crayon, rapidColour: look.rapid, width: 1.6, opacity: 0.4, hidden: true, travel, order: 9 }));
-  group.add(lineMesh(geometry, screen, { colour: look.crayon, rapidColour: look.rapid, width: 2.5, travel, order: 11 }));
+  const path = { ...shared, colour: colours.crayon, rapidColour: colours.rapid };
+  if (colours.casing) group.add(lineMesh(geometry, screen, { ...shared, colour: colours.casing, width: 5.5, order: 10, opacity: 0.9 }));
+  group.add(lineMesh(geometry, screen, { ...path, width: 1.6, opacity: 0.4, hidden: true, order: 9 }));
+  group.add(lineMesh(geometry, screen, { ...path, width: 2.5, order: 11 }));
   return group;
 }

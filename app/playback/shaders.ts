@@ -8,7 +8,7 @@ const DEPTH = /* glsl */ `
     float depth = 0.0;
     for (int k = 0; k < uLayers; k++) {
       vec4 fall = texelFetch(uFalls, at + ivec2(0, k * uRows), 0);
-      if (uTravel < fall.x) continue;
+      if (uTravel < fall.x) break; // they come in the order in which they begin
       float share = fall.z > fall.x ? clamp((uTravel - fall.x) / (fall.z - fall.x), 0.0, 1.0) : 1.0;
       depth = min(depth, mix(fall.y, fall.w, share));
     }
@@ -76,20 +76,32 @@ export const WOOD_FRAGMENT = /* glsl */ `
 
 /** Lines of a set width on the screen; what is behind the travel is solid, what is ahead dashed, rapids dotted. */
 export const LINE_VERTEX = /* glsl */ `
+  precision highp int;
+  #ifdef PROFILE
+    // The edge that the section leaves along the wood: its height comes from the wood.
+    ${DEPTH}
+    attribute vec2 aCrossings;
+    vec3 onWood(vec3 place, float crossing) {
+      return crossing < 0.0 ? place : vec3(place.xy, depthOf(int(crossing + 0.5)));
+    }
+  #endif
   attribute vec3 aFrom, aTo;
   attribute vec2 aTravel;
   attribute float aRapid;
   uniform vec2 uSize;
-  uniform float uWidth, uPixels;
-  varying float vTravel, vRapid;
-  varying float vAway;
-  varying vec2 vLens;
+  uniform float uWidth, uPixels, uLift;
+  varying float vTravel, vRapid, vAcross;
   void main() {
-    vec4 a = projectionMatrix * viewMatrix * vec4(aFrom, 1.0);
-    vec4 b = projectionMatrix * viewMatrix * vec4(aTo, 1.0);
+    #ifdef PROFILE
+      vec3 fromPlace = onWood(aFrom, aCrossings.x), toPlace = onWood(aTo, aCrossings.y);
+    #else
+      vec3 fromPlace = aFrom, toPlace = aTo;
+    #endif
+    vec4 a = projectionMatrix * viewMatrix * vec4(fromPlace, 1.0);
+    vec4 b = projectionMatrix * viewMatrix * vec4(toPlace, 1.0);
     // An end behind the eye is brought in front of it, or the line would fly off.
-    vLens = vec2(projectionMatrix[2][2], projectionMatrix[3][2]);
-    float near = vLens.y / (vLens.x - 1.0);
+    float lensA = projectionMatrix[2][2], lensB = projectionMatrix[3][2];
+    float near = lensB / (lensA - 1.0);
     vec2 kept = vec2(0.0, 1.0);
     if (a.w < near && b.w > near) kept.x = (near - a.w) / (b.w - a.w);
     if (b.w < near && a.w > near) kept.y = (near - a.w) / (b.w - a.w);
@@ -103,18 +115,25 @@ export const LINE_VERTEX = /* glsl */ `
     vec2 shift = (way * (position.x < 0.5 ? -0.5 : 0.5) + vec2(-way.y, way.x) * position.y) * uWidth * uPixels;
     vTravel = mix(aTravel.x, aTravel.y, position.x < 0.5 ? kept.x : kept.y);
     vRapid = aRapid;
-    gl_Position = vec4(end.xy + shift * 2.0 / uSize * end.w, end.zw);
-    vAway = end.w;
+    vAcross = mix(aFrom.y, aTo.y, position.x < 0.5 ? kept.x : kept.y);
+    gl_Position = vec4(end.xy + shift * 2.0 / uSize * end.w, 0.0, end.w);
+    // A little nearer than it is, to lie on top of the face it lies on.
+    gl_Position.z = lensB / (1.0 - uLift) - lensA * end.w;
   }
 `;
 
 export const LINE_FRAGMENT = /* glsl */ `
-  varying float vTravel, vRapid, vAway;
-  varying vec2 vLens;
+  varying float vTravel, vRapid, vAcross;
   uniform vec3 uColour, uRapidColour;
-  uniform float uTravel, uOpacity, uPixels;
+  uniform float uTravel, uOpacity, uPixels, uMiddle;
+  uniform bool uSection;
   void main() {
-    bool ahead = vTravel > uTravel;
+    if (uSection && vAcross < uMiddle) discard;
+    #ifdef PROFILE
+      bool ahead = false;
+    #else
+      bool ahead = vTravel > uTravel;
+    #endif
     if (ahead || vRapid > 0.5) {
       // A period of about ten pixels, in steps of two, so that dashes neither crawl nor crowd as the view moves.
       float pixel = max(fwidth(vTravel), 1e-9) * uPixels;
@@ -122,9 +141,6 @@ export const LINE_FRAGMENT = /* glsl */ `
       if (fract(vTravel / period) > (vRapid > 0.5 ? 0.35 : 0.55)) discard;
     }
     gl_FragColor = vec4(vRapid > 0.5 ? uRapidColour : uColour, uOpacity);
-    // A line is a sliver many times longer than wide, too thin for its depth to come out right on its own. It is put
-    // a thousandth of its distance in front of the face it lies on.
-    gl_FragDepth = 0.5 + 0.5 * (vLens.y / (vAway * 0.999) - vLens.x);
   }
 `;
 

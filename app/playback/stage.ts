@@ -1,14 +1,14 @@
-import { BufferGeometry, Group, Material, Mesh, Vector2 } from 'three';
-import type { CanvasTexture, Object3D } from 'three';
-import type { Box, Removal, Segments, StageSizes } from '#shared/playback/index';
+import { BufferGeometry, DataTexture, Group, Material, Mesh, Vector2 } from 'three';
+import type { CanvasTexture, IUniform, Object3D } from 'three';
+import type { Removal, Segments, StageSizes } from '#shared/playback/index';
 import type { SlotSpec } from '#shared/slot/spec';
 import type { Moment } from '#shared/time/index';
 import { bitGroup } from './bit';
 import { endGrain, longGrain } from './grain';
 import { keepOutGroup } from './keepOut';
-import { type Screen, asSegments, boxEdges, lineGeometry, lineMesh, pathLines } from './lines';
+import { type Screen, asSegments, boxEdges, lineGeometry, lineMesh, pathLines, pieceOf, profileLine } from './lines';
 import type { Palette } from './palette';
-import { disposeWood, woodGroup } from './wood';
+import { fieldUniforms, middleLine, middleOf, woodGroup } from './wood';
 
 /** What the stage shows, worked out beforehand. */
 export interface StageParts {
@@ -36,28 +36,38 @@ export class Stage {
   private readonly screen: Screen = { size: { value: new Vector2(1, 1) }, pixels: { value: 1 } };
   private readonly long: CanvasTexture = longGrain();
   private readonly end: CanvasTexture = endGrain();
-  private bit: { readonly group: Group; readonly turning: Group } | null = null;
+  private bit: ReturnType<typeof bitGroup> | null = null;
   private wood: Group | null = null;
   private edges: Object3D | null = null;
   private halfEdges: Object3D | null = null;
 
+  private readonly field: Record<string, IUniform>;
+
   constructor(private readonly parts: StageParts, palette: Palette) {
     this.sizes = parts.sizes;
+    this.field = fieldUniforms(parts.removal);
     this.paint(palette);
   }
 
   /** Makes every part in the palette's colours; again when the theme or the species changes. */
   paint(palette: Palette): void {
-    const place = this.bit?.group.position.clone();
+    const old = this.bit;
     this.clear();
     const { sizes, spec, segments, removal } = this.parts;
     const { rail } = sizes;
-    this.wood = woodGroup(rail, removal, palette, { travel: this.travel, section: this.section, long: this.long, end: this.end });
+    const middle = middleOf(rail, removal);
+    this.wood = woodGroup(rail, removal, this.field, palette, { travel: this.travel, section: this.section, long: this.long, end: this.end });
     this.edges = this.outline(boxEdges(rail, rail.y0), palette);
-    this.halfEdges = this.outline(boxEdges(rail, middleOf(rail, removal)), palette);
+    this.halfEdges = new Group().add(
+      this.outline(boxEdges(rail, middle, false), palette),
+      profileLine(middleLine(rail, removal), middle, rail.z1, this.screen, { colour: palette.ink, width: 2, travel: this.travel, order: 5, ...(removal ? { field: this.field } : {}) }),
+    );
     this.bit = bitGroup(sizes, spec, palette, this.screen);
-    if (place) this.bit.group.position.copy(place);
-    this.root.add(this.wood, this.edges, this.halfEdges, pathLines(segments, this.screen, this.travel, palette), this.bit.group, keepOutGroup(sizes, palette, this.screen));
+    if (old) {
+      this.bit.group.position.copy(old.group.position);
+      this.bit.holder.visible = old.holder.visible;
+    }
+    this.root.add(this.wood, this.edges, this.halfEdges, pathLines(segments, this.screen, pieceOf(rail), palette, { travel: this.travel, section: this.section, middle }), this.bit.group, keepOutGroup(sizes, palette, this.screen));
     // Nothing here is pointed at: without this every move of the pointer would be tried against every triangle.
     this.root.traverse((part) => (part.raycast = () => undefined));
     this.showSection(this.section.value);
@@ -81,6 +91,11 @@ export class Stage {
     if (cap) cap.visible = on;
   }
 
+  /** From straight above, the nut and the spindle would hide the bit. */
+  showHolder(on: boolean): void {
+    if (this.bit) this.bit.holder.visible = on;
+  }
+
   /** Tells the lines how large the canvas is, in device pixels. */
   resize(width: number, height: number, pixels: number): void {
     this.screen.size.value.set(width, height);
@@ -89,16 +104,17 @@ export class Stage {
 
   dispose(): void {
     this.clear();
+    const falls: unknown = this.field.uFalls?.value;
+    if (falls instanceof DataTexture) falls.dispose();
     this.long.dispose();
     this.end.dispose();
   }
 
   private outline(lines: Parameters<typeof asSegments>[0], palette: Palette): Object3D {
-    return lineMesh(lineGeometry(asSegments(lines)), this.screen, { colour: palette.ink, width: 2, travel: { value: BEHIND }, order: 5 });
+    return lineMesh(lineGeometry(asSegments(lines), pieceOf(this.sizes.rail)), this.screen, { colour: palette.ink, width: 2, lift: 0.005, travel: { value: BEHIND }, order: 5 });
   }
 
   private clear(): void {
-    if (this.wood) disposeWood(this.wood);
     this.root.traverse((part) => {
       if (!(part instanceof Mesh)) return;
       if (part.geometry instanceof BufferGeometry) part.geometry.dispose();
@@ -109,7 +125,3 @@ export class Stage {
 }
 
 const stated = (value: number, otherwise: number): number => (value === value ? value : otherwise);
-
-function middleOf(rail: Box, removal: Removal | null): number {
-  return removal?.grid.ys[(removal.grid.rows - 1) / 2] ?? (rail.y0 + rail.y1) / 2;
-}

@@ -13,16 +13,15 @@ export interface WoodUniforms {
 }
 
 /** The rail: a block whose top is left open where the cut is, the net that fills it, and the face a section shows. */
-export function woodGroup(rail: Box, removal: Removal | null, palette: Palette, shared: WoodUniforms): Group {
+export function woodGroup(rail: Box, removal: Removal | null, field: Record<string, IUniform>, palette: Palette, shared: WoodUniforms): Group {
   const group = new Group();
   const wide = rail.y1 - rail.y0;
-  const middle = removal ? middleRow(removal).y : (rail.y0 + rail.y1) / 2;
+  const middle = middleOf(rail, removal);
   const uniforms = {
     uWood: { value: palette.wood }, uHi: { value: palette.woodHi }, uLo: { value: palette.woodLo }, uGrain: { value: palette.woodGrain }, uDeep: { value: palette.woodDeep },
     uLong: { value: shared.long }, uEnd: { value: shared.end },
     uWide: { value: wide }, uSlight: { value: wide * 1e-4 }, uMiddle: { value: middle }, uSection: shared.section, uTravel: shared.travel,
   };
-  const field = removal ? fieldUniforms(removal) : {};
   const add = (geometry: BufferGeometry, defines: Record<string, string>) => {
     const material = new ShaderMaterial({ vertexShader: WOOD_VERTEX, fragmentShader: WOOD_FRAGMENT, uniforms: { ...uniforms, ...field }, defines, side: DoubleSide });
     const mesh = new Mesh(geometry, material);
@@ -38,21 +37,34 @@ export function woodGroup(rail: Box, removal: Removal | null, palette: Palette, 
   return group;
 }
 
-/** Frees the depth texture, which belongs to no material as far as the library knows. */
-export function disposeWood(group: Group): void {
-  group.traverse((part) => {
-    if (!(part instanceof Mesh) || !(part.material instanceof ShaderMaterial)) return;
-    const falls: unknown = part.material.uniforms.uFalls?.value;
-    if (falls instanceof DataTexture) falls.dispose();
-  });
-}
-
-function fieldUniforms({ grid, falls }: Removal): Record<string, IUniform> {
+/** The falls as the shaders read them: a texture, and how it is laid out. Empty where nothing is cut. */
+export function fieldUniforms(removal: Removal | null): Record<string, IUniform> {
+  if (!removal) return {};
+  const { grid, falls } = removal;
   const { data, layers } = packFalls(falls, grid.columns, grid.rows);
   const texture = new DataTexture(data, grid.columns, grid.rows * layers, RGBAFormat, FloatType);
   texture.minFilter = texture.magFilter = NearestFilter;
   texture.needsUpdate = true;
   return { uFalls: { value: texture }, uColumns: { value: grid.columns }, uRows: { value: grid.rows }, uLayers: { value: layers } };
+}
+
+/** Where the section is cut: along the middle of what is cut away, or of the rail. */
+export function middleOf(rail: Box, removal: Removal | null): number {
+  return removal ? middleRow(removal).y : (rail.y0 + rail.y1) / 2;
+}
+
+/** The places along the section where the wood's height may change; a crossing of -1 stays at the top. */
+export function middleLine(rail: Box, removal: Removal | null): { readonly x: number; readonly crossing: number }[] {
+  const line = [{ x: rail.x0, crossing: -1 }];
+  if (removal) {
+    const { row } = middleRow(removal);
+    for (let c = 0; c < removal.grid.columns; c++) {
+      const crossing = row * removal.grid.columns + c;
+      line.push({ x: removal.places[crossing * 2] ?? 0, crossing });
+    }
+  }
+  line.push({ x: rail.x1, crossing: -1 });
+  return line;
 }
 
 /** The row of crossings along the middle of the cut. */
@@ -108,16 +120,9 @@ function fieldGeometry({ grid, places }: Removal): BufferGeometry {
 }
 
 /** The face along the middle of the cut: as high as the wood is at each crossing of the middle row. */
-function capGeometry({ x0, x1, z0, z1 }: Box, removal: Removal | null, y: number): BufferGeometry {
-  const tops: { readonly x: number; readonly crossing: number }[] = [{ x: x0, crossing: -1 }];
-  if (removal) {
-    const { row } = middleRow(removal);
-    for (let c = 0; c < removal.grid.columns; c++) {
-      const crossing = row * removal.grid.columns + c;
-      tops.push({ x: removal.places[crossing * 2] ?? 0, crossing });
-    }
-  }
-  tops.push({ x: x1, crossing: -1 });
+function capGeometry(rail: Box, removal: Removal | null, y: number): BufferGeometry {
+  const { z0, z1 } = rail;
+  const tops = middleLine(rail, removal);
   const position = tops.flatMap(({ x }) => [x, y, z1, x, y, z0]);
   const crossings = tops.flatMap(({ crossing }) => [crossing, -1]);
   const index = tops.slice(1).flatMap((_, i) => [0, 1, 3, 0, 3, 2].map((k) => i * 2 + k));

@@ -37,7 +37,7 @@ export interface PlanView {
 }
 
 const LEAST_HEIGHT = 72; // px: below this the groove of a 1 1/4 rail is too thin to read
-const MOST_HEIGHT = 132; // px: a short wide rail must not push the rest off the sheet
+const MOST_HEIGHT = 180; // px: a short wide rail must not push the rest off the sheet
 const BREAK_GAP = 20; // px of bare sheet between two pieces
 
 /** The wavy wood break, downwards: two shallow bends. */
@@ -74,13 +74,14 @@ export function planView(sizes: PlanSizes, room: { readonly left: number; readon
   const [top, bottom] = [room.top, room.top + height];
 
   const ends = broken ? shown / count : scale * railLength;
+  const start = broken ? room.left : room.left + (span - ends) / 2;
   const spans: readonly (readonly [number, number, number])[] = broken
     ? Array.from({ length: count }, (_, i) => {
         const long = ends / scale;
         const from = i === 0 ? 0 : i === count - 1 ? railLength - long : (railLength - long) / 2;
         return [from, from + long, room.left + i * (ends + BREAK_GAP)] as const;
       })
-    : [[0, railLength, room.left]];
+    : [[0, railLength, start]];
   const pieces = spans.map(([from, to, left], i): Piece => {
     const right = left + (to - from) * scale;
     return { from, to, left, right, outline: outline(left, right, top, bottom, { left: i > 0, right: i < spans.length - 1 }) };
@@ -93,7 +94,7 @@ export function planView(sizes: PlanSizes, room: { readonly left: number; readon
     const before = pieces.findLast(({ to }) => to < along);
     return before ? before.right + BREAK_GAP / 2 : room.left;
   };
-  return { scale, broken, pieces, top, bottom, left: room.left, right: last?.right ?? room.right, at, across: (from) => bottom - from * scale };
+  return { scale, broken, pieces, top, bottom, left: start, right: last?.right ?? room.right, at, across: (from) => bottom - from * scale };
 }
 
 /** Open crow's feet, two strokes 24° each side of the line: `toward` is +1 where the line comes from the right. */
@@ -118,7 +119,7 @@ export function ticks(view: PlanView, units: Units): readonly Tick[] {
   const unit = units === 'in' ? 1 : 10;
   const fine = view.scale * (units === 'in' ? 1 : MM_PER_INCH);
   const parts = units === 'in' ? (fine / 16 >= 3 ? 16 : fine / 8 >= 3 ? 8 : 4) : view.scale >= 3 ? 10 : view.scale * 5 >= 3 ? 2 : 1;
-  const every = [1, 2, 5, 10, 20, 50].find((n) => n * unit * view.scale >= 26) ?? 100;
+  const every = [1, 2, 5, 10, 20, 50].find((n) => n * unit * view.scale >= (units === 'in' ? 26 : 44)) ?? 100;
   return view.pieces.flatMap((piece) => {
     const first = Math.ceil((piece.from * parts) / unit + 1e-6);
     const last = Math.floor((piece.to * parts) / unit - 1e-6);

@@ -15,15 +15,10 @@ const onOff = (on: string, off: string) => [['true', on], ['false', off]] as con
 /** Everything that has a default, by what it belongs to. */
 export const SETTINGS: readonly { readonly name: string; readonly settings: readonly Setting[] }[] = [
   {
-    name: 'Groove and wood',
+    name: 'Wood and cut',
     settings: [
       pick('wood', 'Wood', 'hardwood', [['white-oak', 'white oak'], ['walnut', 'walnut'], ['cherry', 'cherry'], ['poplar', 'poplar'], ['pine', 'pine'], ['softwood', 'softwood'], ['plywood', 'plywood'], ['mdf', 'MDF']], source('wood')),
       pick('ends', 'Ends', 'cornered', [['round', 'full round']], source('ends')),
-    ],
-  },
-  {
-    name: 'Cut',
-    settings: [
       box('rampAngle', 'Steepest entry', '°', source('rampAngle')),
       box('stepover', 'Stepover, share of the bit', '', source('stepover')),
       box('finishAllowance', 'Finish allowance', 'length', source('finishAllowance')),

@@ -1,4 +1,4 @@
-import { type Finding, type Readback, type Severity } from '#shared/readback/finding';
+import type { Finding, Readback, Severity } from '#shared/readback/finding';
 
 const COUNTS = ['No', 'One', 'Two', 'Three', 'Four', 'Five', 'Six', 'Seven', 'Eight', 'Nine', 'Ten'];
 

@@ -3,21 +3,9 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { buildIfChanged } from './setup/build.mjs';
 import { chromiumPath, prepareChromium, prepareCurl } from './setup/chromium.mjs';
+import { count } from './setup/count.mjs';
 import { installDependencies } from './setup/packages.mjs';
 import { Stop, main, mustRun, runTool, say } from './setup/run.mjs';
-
-/**
- * Passed and failed tests by vitest's own report. A test that was skipped has not passed, and a file that could not
- * be run has failed.
- */
-function count(report) {
-  const tests = report.testResults.flatMap((file) => file.assertionResults);
-  const passed = tests.filter((test) => test.status === 'passed').length;
-  const emptyFiles = report.testResults.filter((file) => file.status === 'failed' && !file.assertionResults.some((test) => test.status === 'failed'));
-  for (const file of emptyFiles) console.error(`Not run: ${file.name}`);
-  for (const test of tests.filter((one) => one.status !== 'passed' && one.status !== 'failed')) console.error(`Skipped, so not passed: ${test.fullName}`);
-  return { passed, failed: tests.length - passed + emptyFiles.length };
-}
 
 async function runVitest(args) {
   const folder = mkdtempSync(join(tmpdir(), 'tallyrail-'));
@@ -27,7 +15,7 @@ async function runVitest(args) {
       env: { CHROMIUM_PATH: chromiumPath() },
     });
     if (!existsSync(file)) throw new Stop(`vitest ended with exit code ${code} and left no report.`);
-    const counted = count(JSON.parse(readFileSync(file, 'utf8')));
+    const counted = count(JSON.parse(readFileSync(file, 'utf8')), console.error);
     // An error outside every test fails the run though no test did.
     return code !== 0 && counted.failed === 0 ? { ...counted, failed: 1 } : counted;
   } finally {

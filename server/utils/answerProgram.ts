@@ -1,6 +1,6 @@
 import { type H3Event, setResponseHeaders } from 'h3';
 import type { MadeProgram } from '#shared/makeProgram';
-import { sentenceOf } from '#shared/readback/sentences';
+import { findingLine } from './findingLine';
 import { type FieldError, problem } from './problem';
 
 type GoodProgram = Extract<MadeProgram, { readonly ok: true }>;
@@ -22,9 +22,8 @@ export function programAnswer({ program, fileName, mark, sha256, spec, summary, 
 
 /** The answer in place of a program that does not cut what was drawn: the findings, and no text. */
 export function withheld({ readback, spec }: MadeProgram) {
-  const errors = readback.findings.filter(({ severity }) => severity === 'disagrees').map((finding): FieldError => {
-    const { text, wanted, measured, cure } = sentenceOf(finding, spec.units);
-    return { path: `readback.${finding.rule}`, message: `${text}: wanted ${wanted}, measured ${measured}. ${cure ?? ''}`.trim() };
-  });
+  const errors = readback.findings
+    .filter(({ severity }) => severity === 'disagrees')
+    .map((finding): FieldError => ({ path: `readback.${finding.rule}`, message: findingLine(finding, spec.units) }));
   return problem(500, 'The program was read back and does not agree with the spec, so it is withheld; readback has what was measured.', { errors, readback });
 }

@@ -101,7 +101,7 @@ const lastLine = (at: number, from: number, cell: number, lines: number) => Math
 function measureWalls({ ends }: Segments, i: number, radius: number, grid: Grid, off: Float64Array, toward: Float64Array): number {
   const [ax = 0, ay = 0, az = 0, bx = 0, by = 0, bz = 0] = ends.subarray(i * 6, i * 6 + 6);
   if (Math.min(az, bz) >= 0) return 0;
-  const margin = radius + Math.max(grid.cellX, grid.cellY);
+  const margin = radius + 1.5 * Math.max(grid.cellX, grid.cellY); // a diagonal of a cell beyond the wall, and a little
   const c0 = firstLine(Math.min(ax, bx) - margin, grid.x0, grid.cellX);
   const c1 = lastLine(Math.max(ax, bx) + margin, grid.x0, grid.cellX, grid.columns);
   const r0 = firstLine(Math.min(ay, by) - margin, grid.y0, grid.cellY);
@@ -128,17 +128,20 @@ function measureWalls({ ends }: Segments, i: number, radius: number, grid: Grid,
 }
 
 /**
- * Puts every crossing less than ¾ of a cell from the wall of the finished cut onto it, just inside or just outside, so
- * that walls stand upright and round ends are round. The outer frame stays: it joins the block.
+ * Puts every crossing that has a neighbour on the other side of the finished cut's wall onto that wall, just inside or
+ * just outside, so that walls stand upright and round ends are round. The outer frame stays: it joins the block.
  */
 function placeCrossings(grid: Grid, off: Float64Array, toward: Float64Array, places: Float64Array, lip: number): void {
-  const near = 0.75 * Math.min(grid.cellX, grid.cellY);
-  for (let r = 0; r < grid.rows; r++) {
-    for (let c = 0; c < grid.columns; c++) {
-      const v = r * grid.columns + c;
-      const distance = off[v] ?? Infinity;
-      const frame = r === 0 || c === 0 || r === grid.rows - 1 || c === grid.columns - 1;
-      const shift = !frame && Math.abs(distance) < near ? (distance <= EDGE ? -lip : lip) - distance : 0;
+  const { columns, rows } = grid;
+  const inside = (v: number) => (off[v] ?? Infinity) <= EDGE;
+  const beside = [-columns - 1, -columns, -columns + 1, -1, 1, columns - 1, columns, columns + 1];
+  for (let r = 0; r < rows; r++) {
+    for (let c = 0; c < columns; c++) {
+      const v = r * columns + c;
+      const frame = r === 0 || c === 0 || r === rows - 1 || c === columns - 1;
+      const within = inside(v);
+      const atWall = !frame && beside.some((to) => inside(v + to) !== within);
+      const shift = atWall && Number.isFinite(off[v]) ? (within ? -lip : lip) - (off[v] ?? 0) : 0;
       places[v * 2] = (grid.xs[c] ?? 0) + (toward[v * 2] ?? 0) * shift;
       places[v * 2 + 1] = (grid.ys[r] ?? 0) + (toward[v * 2 + 1] ?? 0) * shift;
     }
@@ -150,7 +153,7 @@ function sweep({ ends, travel }: Segments, i: number, radius: number, floor: num
   const [ax = 0, ay = 0, az = 0, bx = 0, by = 0, bz = 0] = ends.subarray(i * 6, i * 6 + 6);
   const begins = travel[i * 2] ?? 0;
   const whole = (travel[i * 2 + 1] ?? 0) - begins;
-  const margin = radius + Math.max(grid.cellX, grid.cellY);
+  const margin = radius + 1.5 * Math.max(grid.cellX, grid.cellY); // crossings have been moved by up to a diagonal
   const c0 = firstLine(Math.min(ax, bx) - margin, grid.x0, grid.cellX);
   const c1 = lastLine(Math.max(ax, bx) + margin, grid.x0, grid.cellX, grid.columns);
   const r0 = firstLine(Math.min(ay, by) - margin, grid.y0, grid.cellY);

@@ -33,7 +33,7 @@ export function writeProgram(request: SlotRequest, path: SlotPath, facts: Header
   const numbered = options.lineNumbers ? numberLines(lines) : lines;
   const all = options.percent ? ['%', ...numbered, '%'] : numbered;
   const text = all.map((line) => line + (options.lineEndings === 'crlf' ? '\r\n' : '\n')).join('');
-  return text.replace(markComment(BLANK_MARK), () => markComment(programMark(text)));
+  return facts ? text.replace(markComment(BLANK_MARK), () => markComment(programMark(text))) : text;
 }
 
 function numberLines(lines: readonly string[]): string[] {

@@ -63,7 +63,7 @@ export function isMotion(step: Step): step is Motion {
 }
 
 /** The straight pieces of a motion that lie below the rail's top; none while the machine's place is not known. */
-function piecesBelow(motion: Motion, sagitta: number): Piece[] {
+export function piecesBelow(motion: Motion, sagitta: number): Piece[] {
   const { from, to } = motion;
   if (!(from.z < 0 || to.z < 0) || Number.isNaN(from.x + from.y)) return [];
   const pieces: Piece[] = [];

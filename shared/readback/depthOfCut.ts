@@ -21,9 +21,13 @@ const MOST_PLACES = 12;
  * At places along each piece, in time order, the line across the cutter is compared with what every earlier piece
  * left there (its height at the nearest point of its way).
  *
- * @param narrow wood taken over at most this much of the line does not count: a finish lap's allowance, or a hair.
+ * @param narrow wood taken over at most this much of the line does not count.
+ * @param within where wood counts, a convex area that holds the cutter's middle: all but the skin that was left for a
+ *   finish lap; null for everywhere.
  */
-export function deepestCut(pieces: readonly Piece[], radius: number, narrow: number): Deepest {
+export function deepestCut(
+  pieces: readonly Piece[], radius: number, narrow: number, within: ((x: number, y: number) => boolean) | null = null,
+): Deepest {
   const index = new PieceIndex(pieces, radius);
   let deepest: Deepest = { depth: 0, piece: null, point: null };
   pieces.forEach((piece, order) => {
@@ -32,7 +36,7 @@ export function deepestCut(pieces: readonly Piece[], radius: number, narrow: num
     for (const t of places(piece, order, index, radius)) {
       const at = along(piece, t);
       for (const [nx, ny] of across(piece)) {
-        const line = { at, nx, ny, radius };
+        const line = { at, nx, ny, radius, ...span(at, nx, ny, radius, within) };
         const covers = coversAbove(line, order, index, deepest.depth + NOISE, narrow);
         const depth = covers ? sustainedDepth(line, covers, narrow) : 0;
         if (depth > deepest.depth) deepest = { depth, piece, point: at };
@@ -60,8 +64,8 @@ function across({ x0, y0, x1, y1 }: Piece): readonly (readonly [number, number])
 function places(piece: Piece, order: number, index: PieceIndex, radius: number): number[] {
   const [dx, dy] = [piece.x1 - piece.x0, piece.y1 - piece.y0];
   const square = dx * dx + dy * dy;
+  if (square < radius * radius / 16) return [0.5, 1]; // shorter than an eighth of the bit: the wood cannot change much
   const found = [0, 0.5, 1];
-  if (square === 0) return found;
   const same = radius / Math.sqrt(square) / 8; // an eighth of the radius: nearer places see the same wood
   for (const other of index.newestFirst(along(piece, 0.5), order, Math.sqrt(square) / 2 + radius)) {
     if (found.length >= MOST_PLACES) break;
@@ -73,12 +77,30 @@ function places(piece: Piece, order: number, index: PieceIndex, radius: number):
   return found;
 }
 
-/** The line across the cutter at a place: points `at` + u (nx, ny), |u| ≤ radius. */
+/** The line across the cutter at a place: points `at` + u (nx, ny), of which those from `low` to `high` count. */
 interface Line {
   readonly at: Point3;
   readonly nx: number;
   readonly ny: number;
   readonly radius: number;
+  readonly low: number;
+  readonly high: number;
+}
+
+/** How much of the line across the cutter counts: out from its middle as far as the area reaches. */
+function span(at: Point3, nx: number, ny: number, radius: number, within: ((x: number, y: number) => boolean) | null) {
+  const reach = (way: 1 | -1): number => {
+    const counts = (u: number) => within === null || within(at.x + way * u * nx, at.y + way * u * ny);
+    if (counts(radius)) return radius;
+    let [inside, out] = [0, radius];
+    while (out - inside > radius * 1e-6) { // a millionth of the bit: below any last decimal
+      const u = (inside + out) / 2;
+      if (counts(u)) inside = u;
+      else out = u;
+    }
+    return inside;
+  };
+  return { low: -reach(-1), high: reach(1) };
 }
 
 /** Where a piece crosses the line. */
@@ -100,11 +122,12 @@ function heightAt({ at, nx, ny }: Line, u: number, piece: Piece): number {
 function coversAbove(line: Line, order: number, index: PieceIndex, depth: number, narrow: number): Cover[] | null {
   if (-line.at.z <= depth) return null;
   const covers: Cover[] = [];
-  let open: (readonly [number, number])[] = [[-line.radius, line.radius]];
+  let open: (readonly [number, number])[] = [[line.low, line.high]];
   for (const piece of index.newestFirst(line.at, order, line.radius)) {
     const stretch = stretchAcross(piece, line);
     if (!stretch) continue;
-    const [from, to] = stretch;
+    const [from, to] = [Math.max(stretch[0], line.low), Math.min(stretch[1], line.high)];
+    if (from >= to) continue;
     covers.push({ from, to, piece });
     // Heights run evenly along the stretch, so its two ends bound them.
     if (Math.max(heightAt(line, from, piece), heightAt(line, to, piece)) - line.at.z > depth) continue;
@@ -118,7 +141,7 @@ function coversAbove(line: Line, order: number, index: PieceIndex, depth: number
 
 /** The greatest depth that is taken over more than `narrow` of the line. */
 function sustainedDepth(line: Line, covers: readonly Cover[], narrow: number): number {
-  const bounds = [-line.radius, line.radius, ...covers.flatMap(({ from, to }) => [from, to])].sort((a, b) => a - b);
+  const bounds = [line.low, line.high, ...covers.flatMap(({ from, to }) => [from, to])].sort((a, b) => a - b);
   const cut: { depth: number; width: number }[] = [];
   for (let i = 1; i < bounds.length; i++) {
     const [from, to] = [bounds[i - 1] ?? 0, bounds[i] ?? 0];
@@ -173,7 +196,5 @@ function stretchAcross(piece: Piece, { at, nx, ny, radius }: Line): [number, num
       to = Math.max(to, u);
     }
   }
-  from = Math.max(from, -radius);
-  to = Math.min(to, radius);
   return from < to ? [from, to] : null;
 }

@@ -9,6 +9,7 @@ export interface Side {
   readonly from: Point2;
   readonly to: Point2;
   readonly centre: Point2 | null;
+  /** Of a round end's quarter its chord's: a ramp along it stays gentle enough also where the text has chords. */
   readonly length: number;
   readonly slopes: boolean;
 }
@@ -74,8 +75,7 @@ export function lapAt(area: CentreArea, inset: number, turn: Turn): Lap {
 
   let from = at(-s, -b);
   const sides = corners.map(({ to, centre }) => {
-    const chord = Math.hypot(to.x - from.x, to.y - from.y);
-    const side = { from, to, centre, length: centre ? (Math.PI / 2) * b : chord };
+    const side = { from, to, centre, length: Math.hypot(to.x - from.x, to.y - from.y) };
     from = to;
     return side;
   }).filter((side) => side.length > 0);

@@ -11,6 +11,8 @@ export interface Layout {
   readonly grid: number;
   /** Laps of one pass, innermost first; none where the bit runs along a line between the two ends. */
   readonly laps: readonly Lap[];
+  /** The lap that each pass is entered on. */
+  readonly opening: number;
   /** The lap on the walls at full depth; null where no finish lap is asked. */
   readonly finish: Lap | null;
   /** False where even the longest travel is too short to ramp on. */
@@ -46,7 +48,7 @@ export function layOut(spec: SlotSpec, grid: number): Layout {
 
   if (isOneBit(spec) || roughHalf < grid) {
     const ramps = travel >= SHORTEST_RAMP * bitDiameter && rampCapacity(2 * travel, slope, grid) > 0;
-    return { ...base, laps: [], finish, ramps, descents: 1 };
+    return { ...base, laps: [], opening: 0, finish, ramps, descents: 1 };
   }
 
   const step = spec.stepover * bitDiameter;
@@ -54,10 +56,19 @@ export function layOut(spec: SlotSpec, grid: number): Layout {
   const more = single ? 0 : Math.ceil((roughHalf - step / 2) / step - 1e-9);
   const spacing = more === 0 ? 0 : (roughHalf - step / 2) / more;
   const laps = Array.from({ length: more + 1 }, (_, i) => lapAt(area, onGrid(inset + (more - i) * spacing, grid), turn));
-  const around = laps[0] ? slopeLength(laps[0]) : 0;
-  const capacity = rampCapacity(around, slope, grid);
-  const ramps = around >= SHORTEST_RAMP * bitDiameter && capacity > 0;
-  return { ...base, laps, finish, ramps, descents: ramps ? Math.ceil(deepest / capacity) : 1 };
+  return { ...base, laps, finish, ...openingOf(laps, deepest, base, SHORTEST_RAMP * bitDiameter) };
+}
+
+/** The lap to ramp in on: where the times round that a whole ramp needs cost least, the innermost of equals. */
+function openingOf(laps: readonly Lap[], deepest: number, { slope, grid }: Pick<Layout, 'slope' | 'grid'>, shortest: number) {
+  const [best] = laps.flatMap((lap, opening) => {
+    const length = slopeLength(lap);
+    const capacity = rampCapacity(length, slope, grid);
+    if (length < shortest || capacity === 0) return [];
+    const descents = Math.ceil(deepest / capacity);
+    return [{ opening, descents, extra: (descents - 1) * length }];
+  }).sort((a, b) => a.extra - b.extra || a.opening - b.opening);
+  return best ? { opening: best.opening, descents: best.descents, ramps: true } : { opening: 0, descents: 1, ramps: false };
 }
 
 /** Equal passes, in whole steps, that reach the depth: none deeper than the stepdown by more than half a step. */

@@ -6,15 +6,15 @@ import { layOut } from './layout';
 import type { CutMove, MoveRole, SlotPath } from './path';
 import type { SlotSpec } from './spec';
 
-/** A lead onto the wall this many bits long is so shallow that the bit takes no more than the allowance on the way. */
+/** A lead onto the wall this many bits long is so shallow that the bit takes hardly more than the allowance on the way. */
 const LEAD_BITS = 4;
 
 /**
  * Plans one slot as a single continuous cut with no retract between passes.
  *
  * The entry descends along the slot itself, over the same places in each pass, so that no point is ever cut deeper
- * than one pass; the last ramp is cut again level, so that the floor is flat. Wider slots go outward lap by lap from
- * the middle. A finish lap follows at the last depth, and before it wherever the wall would grow taller than the
+ * than one pass; the last ramp is cut again level, so that the floor is flat. Wider slots go lap by lap within
+ * the stepover, the wall last. A finish lap follows at the last depth, and before it wherever the wall would grow taller than the
  * bit's cutting length.
  *
  * @param grid one step of the last decimal written, in the spec's units: depths are whole steps of it.
@@ -27,51 +27,65 @@ export function planSlot(spec: SlotSpec, grid: number): SlotPath {
     moves.push({ to: { x: to.x, y: to.y, z: -steps * grid }, arc, role });
   };
 
-  const innermost = layout.laps[0];
-  const opening = innermost ? openLap(layout, innermost, go) : openLine(layout, spec.finishAllowance, go);
-  const levels: number[] = [];
-  let level = 0;
-  let finished = 0;
-  layout.passes.forEach((pass, i) => {
-    level += pass;
-    levels.push(level * grid);
-    const last = i === layout.passes.length - 1;
+  const { laps, passes, finish } = layout;
+  const levels = passes.map((_, i) => passes.slice(0, i + 1).reduce((sum, pass) => sum + pass, 0));
+  const finishing = finish ? finishPasses(levels, spec.cuttingLength / grid) : new Set<number>();
+  const first = laps[layout.opening];
+  const opening = first ? openLap(layout, first, go) : openLine(layout, spec.finishAllowance, go);
+  // From the lap that was entered on inward, then outward, so that the wall comes last.
+  const others = [...laps.slice(0, layout.opening).reverse(), ...laps.slice(layout.opening + 1)];
+  levels.forEach((level, i) => {
+    const last = i === passes.length - 1;
     const { at, side } = opening.pass(i, level, last);
-    const outermost = goOutward(layout.laps, at, side, level, go);
-    const next = layout.passes[i + 1] ?? 0;
-    if (layout.finish && (last || (level + next - finished) * grid > spec.cuttingLength)) {
-      goFinish(layout.finish, outermost, level, LEAD_BITS * spec.bitDiameter, go);
-      finished = level;
-    }
-    if (!last && (layout.finish || layout.laps.length > 1)) go(at, level, 'pass');
+    const outermost = others.reduce((from, lap) => goRound(lap, side, from, level, 'pass', go), at);
+    if (finish && finishing.has(i)) goFinish(finish, outermost, level, spec, go);
+    if (!last) go(at, level, 'pass');
   });
 
   const start = opening.start;
-  return { start: { x: start.x, y: start.y, z: layout.entryHeight }, moves, levels };
+  return { start: { x: start.x, y: start.y, z: layout.entryHeight }, moves, levels: levels.map((level) => level * grid) };
 }
 
-/** Steps outward from the innermost lap and goes once round each of the others; answers where it ended. */
-function goOutward(laps: readonly Lap[], from: Point2, side: number, level: number, go: Go): Point2 {
-  return laps.slice(1).reduce((at, lap) => goRound(lap, side, at, level, 'pass', go), from);
+/** The passes that a finish lap follows: the last, and before it each from which the wall would grow too tall for the flutes. */
+function finishPasses(levels: readonly number[], tallest: number): Set<number> {
+  const finishing = new Set<number>();
+  let finished = 0;
+  levels.forEach((level, i) => {
+    if ((levels[i + 1] ?? Infinity) - finished <= tallest) return;
+    finishing.add(i);
+    finished = level;
+  });
+  return finishing;
 }
 
-/** On to the wall along a shallow lead, once round it climbing, and off it again so that the retract leaves no mark. */
-function goFinish(lap: Lap, from: Point2, level: number, lead: number, go: Go): void {
-  const { index, on } = leadOn(lap, from, lead);
-  goRound(lap, index, on, level, 'finish', go);
-  go(from, level, 'finish');
-}
-
-/** The straight side with most room for the lead ahead of a point's foot, the nearer one where two have as much. */
-function leadOn(lap: Lap, from: Point2, lead: number): { index: number; on: Point2 } {
+/**
+ * On to the wall along a shallow lead, once round it climbing, and off it again so that the retract leaves no mark.
+ * The lead is along the long side with more room for it, or the nearer of two; it starts where roughing has been.
+ */
+function goFinish(lap: Lap, from: Point2, level: number, spec: SlotSpec, go: Go): void {
+  const lead = LEAD_BITS * spec.bitDiameter;
   const [best] = lap.sides.map((side, index) => {
-    const foot = distanceAlong(side, from);
-    const room = side.centre ? 0 : Math.min(lead, side.length - foot);
-    const on = pointAlong(side, foot + room);
-    return { index, on, room, away: Math.hypot(on.x - from.x, on.y - from.y) };
+    // One bit off the corner at least: the way over then leads through the open middle, not along the end wall.
+    const foot = Math.max(distanceAlong(side, from), Math.min(spec.bitDiameter, side.length / 2));
+    const room = side.from.y === side.to.y ? Math.min(lead, side.length - foot) : 0;
+    const at = pointAlong(side, foot);
+    return { index, side, foot, room, away: Math.hypot(at.x - from.x, at.y - from.y) };
   }).sort((a, b) => b.room - a.room || a.away - b.away);
   assert(best, 'a finish lap has sides');
-  return best;
+  const off = inwardOf(best.side, best.foot, spec.finishAllowance);
+  const on = pointAlong(best.side, best.foot + best.room);
+  go(off, level, 'pass');
+  goRound(lap, best.index, on, level, 'finish', go);
+  go(off, level, 'finish');
+}
+
+/** The point some way inside a counterclockwise lap from a place on one of its sides. */
+function inwardOf(side: Side, distance: number, inset: number): Point2 {
+  const at = pointAlong(side, distance);
+  const { from, to, centre } = side;
+  const [x, y] = centre ? [centre.x - at.x, centre.y - at.y] : [from.y - to.y, to.x - from.x];
+  const scale = inset / Math.hypot(x, y);
+  return { x: at.x + x * scale, y: at.y + y * scale };
 }
 
 /** Once round a lap from the foot of a point on one of its sides, back to that foot. */

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { LENGTH_HELP, type WrittenLength, formatDecimal, lengthIn, parseLength } from '../measure/length';
-import { UNITS } from '../measure/units';
+import { UNITS, byUnits } from '../measure/units';
 import { type ProgramOptions, programOptionsSchema } from '../program/options';
 import { WOODS } from '../wood/woods';
 import { type GivenSpec, fillDefaults } from './defaults';
@@ -150,6 +150,10 @@ export const slotRequestSchema = z
       const unreadable = new Set(context.issues.map((issue) => issue.path?.[0] ?? ''));
       for (const { field, message } of findProblems(fillDefaults(given(value, unreadable)), value.options?.chordTolerance)) {
         context.addIssue({ code: 'custom', path: [field], message });
+      }
+      const most = byUnits(value.units, 0.0005, 0.01); // the finished slot is the asked one to within this
+      if ((value.options?.chordTolerance ?? 0) > most) {
+        context.addIssue({ code: 'custom', path: ['options', 'chordTolerance'], message: `The chord tolerance is ${value.options?.chordTolerance}. Use ${most} ${value.units} or less.` });
       }
     },
     // Also where some fields could not be read: everything wrong is said at once.

@@ -1,17 +1,25 @@
 import type { Point3 } from '../../geometry/point';
 import type { Motion } from '../../reader/motion';
 import { isOneBit } from '../../slot/spec';
-import type { Cut } from '../cut';
+import { type Cut, piecesBelow } from '../cut';
 import { deepestCut } from '../depthOfCut';
 import type { Finding } from '../finding';
 import { type Rule, finding } from './rule';
+import { pastSlot } from './slotShape';
 
-/** Depth of one pass against the stepdown, and of the finish lap against the bit's cutting length. */
+/**
+ * Depth of one pass against the stepdown, and of any cut against the bit's cutting length. The skin that was left for
+ * a finish lap does not count as a pass: that lap takes it at its whole height.
+ */
 export function depthsOfCut(cut: Cut): Finding[] {
   const { spec, tolerance } = cut;
   const radius = spec.bitDiameter / 2;
-  const full = deepestCut(cut.pieces, radius, spec.finishAllowance + tolerance);
-  const any = spec.finishAllowance > 0 ? deepestCut(cut.pieces, radius, tolerance) : full;
+  // Chords as coarse as this lose nothing of a depth; what they stray sideways is taken off the width that counts.
+  const sagitta = radius / 100;
+  const pieces = cut.motions.flatMap((motion) => piecesBelow(motion, sagitta));
+  const hair = tolerance + sagitta;
+  const any = deepestCut(pieces, radius, hair);
+  const full = spec.finishAllowance > 0 ? deepestCut(pieces, radius, hair, (x, y) => pastSlot(cut, x, y, spec.finishAllowance) <= 0) : any;
   const at = (deepest: typeof full) => deepest.piece?.motion.at ?? cut.whole;
   const passes = finding('passDepth', full.depth <= spec.stepdown + tolerance ? 'agrees' : 'disagrees', 'length', at(full), {
     wanted: spec.stepdown, measured: full.depth, point: full.point,
@@ -71,7 +79,7 @@ export const entry: Rule = (cut) => {
 
 /** Which way the long sides are cut, with the spindle clockwise: rightwards in front and leftwards behind climbs. */
 export const laps: Rule = (cut) => {
-  const { spec, tolerance } = cut;
+  const { spec } = cut;
   if (isOneBit(spec)) return null;
   const middle = spec.railWidth / 2;
   const wall = (spec.width - spec.bitDiameter) / 2;
@@ -80,7 +88,7 @@ export const laps: Rule = (cut) => {
   const senses = { climb: 0, conventional: 0 };
   for (const piece of long) {
     const sense = (piece.x1 > piece.x0) === (piece.y0 < middle) ? 'climb' : 'conventional';
-    const finishing = spec.finishAllowance > tolerance && Math.abs(piece.y0 - middle) > wall - tolerance;
+    const finishing = spec.finishAllowance > 0 && Math.abs(piece.y0 - middle) > wall - spec.finishAllowance / 2;
     senses[sense] += 1;
     if (sense !== (finishing ? 'climb' : spec.direction)) wrong ??= piece;
   }

@@ -1,10 +1,11 @@
 import type { Point2 } from '../../geometry/point';
-import { type SlotSpec, isOneBit } from '../../slot/spec';
+import { isOneBit } from '../../slot/spec';
 import type { Cut, Piece } from '../cut';
 import { type Outline, firstUncovered } from '../coverage';
 import { edgeParts, follows } from '../edge';
 import type { Finding } from '../finding';
 import { type Rule, agree, finding, greatest, placeOf } from './rule';
+import { cutWidth, pastSlot, slotShape } from './slotShape';
 
 /** What the cutter takes off the rail's top: how far its sweep reaches each way, and the piece that reaches there. */
 function extents({ pieces, spec }: Cut) {
@@ -19,11 +20,6 @@ function extents({ pieces, spec }: Cut) {
     front: { at: -front.value - radius, piece: front.piece },
     back: { at: back.value + radius, piece: back.piece },
   };
-}
-
-/** A slot no wider than its bit is as wide as the bit cuts. */
-function cutWidth(spec: SlotSpec): number {
-  return isOneBit(spec) ? spec.bitDiameter : spec.width;
 }
 
 /** Finished length, end to end. */
@@ -90,30 +86,10 @@ export function railWidthAssumed(cut: Cut): Finding {
   return finding('railWidth', 'caution', 'length', cut.whole, { wanted: null, measured: cut.spec.railWidth, reason: 'assumed' });
 }
 
-/** The middle of the slot, half its size, and whether its ends are half circles. */
-function slotShape({ spec, railLength }: Cut) {
-  const wide = cutWidth(spec);
-  return {
-    x: railLength / 2,
-    y: spec.railWidth / 2,
-    halfLength: spec.length / 2,
-    halfWidth: wide / 2,
-    // A corner keeps the bit's radius; a round end has the slot's own.
-    corner: spec.ends === 'round' ? wide / 2 : spec.bitDiameter / 2,
-  };
-}
-
 /** Nothing cut outside the slot: how far the cutter's edge ever passes the slot's. */
 export const outside: Rule = (cut) => {
-  const { x, y, halfLength, halfWidth, corner } = slotShape(cut);
-  const radius = cut.spec.bitDiameter / 2;
-  const past = (px: number, py: number): number => {
-    // Distance of the cutter's centre past a rounded rectangle, which for both shapes is the slot less one radius.
-    const r = corner - radius;
-    const dx = Math.abs(px - x) - (halfLength - corner);
-    const dy = Math.abs(py - y) - (halfWidth - corner);
-    return (dx > 0 && dy > 0 ? Math.hypot(dx, dy) : Math.max(dx, dy)) - r;
-  };
+  // The slot is what a bit's radius grows from the area that its centre may be in.
+  const past = (px: number, py: number) => pastSlot(cut, px, py) + cut.spec.bitDiameter / 2;
   const worst = greatest(cut.pieces, (p) => Math.max(past(p.x0, p.y0), past(p.x1, p.y1)));
   const measured = Math.max(0, worst.value);
   return finding('outside', agree(cut, 0, measured), 'length', placeOf(cut, worst.piece).at, {
@@ -177,7 +153,8 @@ export const cleared: Rule = (cut) => {
 export const floor: Rule = (cut) => {
   const pieces = floorPieces(cut);
   const low = greatest(pieces, (p) => -Math.min(p.z0, p.z1));
-  const high = greatest(pieces, (p) => Math.max(p.z0, p.z1));
+  // A ramp's last bit is gone over again; what stays of it is its lower end.
+  const high = greatest(pieces, (p) => Math.min(p.z0, p.z1));
   const measured = pieces.length > 0 ? Math.max(0, high.value + low.value) : cut.spec.depth;
   return finding('floor', agree(cut, 0, measured), 'length', placeOf(cut, low.piece).at, {
     wanted: 0, measured, point: placeOf(cut, low.piece).point,

@@ -97,6 +97,31 @@ describe('removal', () => {
     );
   });
 
+  it('cuts every crossing within the radius of a straight cut and none beyond, to 1/50 000 of an inch', () => {
+    const straight = fc.array(fc.record({ x: fc.integer({ min: 20, max: 120 }), y: fc.integer({ min: 20, max: 100 }) }), { minLength: 1, maxLength: 6 });
+    fc.assert(
+      fc.property(straight, (places) => {
+        const program = buildSteps({ x: 0.5, y: 0.5, z: -0.1 }, 60);
+        for (const place of places) program.line({ x: place.x / 100, y: place.y / 100 });
+        const { removal, steps } = make(program.steps);
+        if (!removal) return;
+        const moves = steps.flatMap((step) => (step.kind === 'line' ? [step] : []));
+        for (let v = 0; v < removal.falls.vertices; v++) {
+          const [x = NaN, y = NaN] = removal.places.subarray(v * 2, v * 2 + 2);
+          const distance = moves.reduce((least, { from, to }) => {
+            const [ux, uy] = [to.x - from.x, to.y - from.y];
+            const along = Math.min(1, Math.max(0, ((x - from.x) * ux + (y - from.y) * uy) / (ux * ux + uy * uy || 1)));
+            return Math.min(least, Math.hypot(x - from.x - ux * along, y - from.y - uy * along));
+          }, Infinity);
+          if (Math.abs(distance - BIT / 2) < 2e-5) continue;
+          const cut = depthAt(removal.falls, v, Infinity) < 0;
+          if (cut !== distance < BIT / 2) expect({ x, y, distance, cut }).toBe('cut exactly within the radius');
+        }
+      }),
+      { numRuns: 30 },
+    );
+  });
+
   it('cuts the hand-written groove to its depth, its width and its length', () => {
     const { removal } = make(grooveSteps().steps);
     expect(removal).not.toBeNull();

@@ -1,0 +1,72 @@
+import { spawn } from 'node:child_process';
+import { mkdtempSync, rmSync } from 'node:fs';
+import { type AddressInfo, createServer } from 'node:net';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { afterEach, beforeEach, describe, expect, it } from 'vitest';
+import { ROOT } from '../support/server';
+
+let folder: string;
+beforeEach(() => (folder = mkdtempSync(join(tmpdir(), 'tallyrail-'))));
+afterEach(() => rmSync(folder, { recursive: true, force: true }));
+
+/** Runs `npm start`'s program until `work` is done with what it printed. */
+async function start(port: string, work: (address: string, said: string) => Promise<void>) {
+  const child = spawn(process.execPath, ['server/cli/start.mjs'], { cwd: ROOT, env: { ...process.env, PORT: port, TALLYRAIL_DATA: folder } });
+  const ended = new Promise<number | null>((resolve) => child.once('exit', resolve));
+  let said = '';
+  try {
+    const address = await new Promise<string>((resolve, reject) => {
+      const hear = (text: Buffer) => {
+        said += text.toString();
+        const at = /Tallyrail is at (\S+)[\s\S]*Stop it/.exec(said)?.[1];
+        if (at) resolve(at);
+      };
+      child.stdout.on('data', hear);
+      child.stderr.on('data', hear);
+      child.once('exit', (code) => reject(new Error(`It ended with exit code ${code}: ${said}`)));
+    });
+    await work(address, said);
+  } finally {
+    child.kill('SIGINT');
+  }
+  return await ended;
+}
+
+/** A port that somebody listens on. */
+async function takenPort() {
+  const server = createServer();
+  await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
+  return { port: (server.address() as AddressInfo).port, free: () => new Promise((resolve) => server.close(resolve)) };
+}
+
+describe('npm start', () => {
+  // Tried again where the machine was busy with something else.
+  it('is up again in under 5 s where nothing has changed, and stops when asked', { retry: 2 }, async () => {
+    const { port, free } = await takenPort();
+    await free();
+    const began = performance.now();
+    const code = await start(String(port), async (address, said) => {
+      expect(performance.now() - began).toBeLessThan(5000);
+      expect(address).toBe(`http://127.0.0.1:${port}`);
+      expect(said).toContain('No sign-in yet');
+      expect((await fetch(address)).status).toBe(200);
+    });
+    expect(code).toBe(0);
+    await expect(fetch(`http://127.0.0.1:${port}`)).rejects.toThrow();
+  });
+
+  it('takes the next port, and says so, where its own is taken', async () => {
+    const { port, free } = await takenPort();
+    await start(String(port), async (address, said) => {
+      expect(said).toContain(`Port ${port} is taken`);
+      expect(Number(new URL(address).port)).toBeGreaterThan(port);
+      expect((await fetch(`${address}/api/openapi.json`)).status).toBe(200);
+    });
+    await free();
+  });
+
+  it('says what is wrong with a port that is none', async () => {
+    await expect(start('abc', async () => {})).rejects.toThrow('PORT is abc. Use a number from 1 to 65535.');
+  });
+});
