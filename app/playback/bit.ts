@@ -47,12 +47,13 @@ function solid(geometry: BufferGeometry, [base, hi, lo]: Tones, screen: Screen, 
   const material = new ShaderMaterial({
     vertexShader: STEEL_VERTEX,
     fragmentShader: STEEL_FRAGMENT,
+    transparent: true, // not see-through: this only has it drawn after the path, which else shows through it as through wood
     uniforms: { uBase: { value: base }, uHi: { value: hi }, uLo: { value: lo }, uSize: screen.size, uPixels: screen.pixels, uHull: { value: hull }, uLand: { value: land } },
     ...(hull > 0 ? { side: BackSide } : {}),
   });
   const mesh = new Mesh(geometry, material);
   mesh.frustumCulled = false;
-  mesh.renderOrder = 20; // over the path
+  mesh.renderOrder = hull > 0 ? 20 : 21; // over the path
   return mesh;
 }
 

@@ -65,8 +65,9 @@ function finishPasses(levels: readonly number[], tallest: number): Set<number> {
 function goFinish(lap: Lap, from: Point2, level: number, spec: SlotSpec, go: Go): void {
   const lead = LEAD_BITS * spec.bitDiameter;
   const [best] = lap.sides.map((side, index) => {
-    // One bit off the corner at least: the way over then leads through the open middle, not along the end wall.
-    const foot = Math.max(distanceAlong(side, from), Math.min(spec.bitDiameter, side.length / 2));
+    // From an end of the slot the way over leads through the open middle, not along the end wall.
+    const near = distanceAlong(side, from);
+    const foot = near > 2 * spec.finishAllowance ? near : Math.min(spec.bitDiameter, side.length / 2);
     const room = side.from.y === side.to.y ? Math.min(lead, side.length - foot) : 0;
     const at = pointAlong(side, foot);
     return { index, side, foot, room, away: Math.hypot(at.x - from.x, at.y - from.y) };

@@ -1,4 +1,4 @@
-import { spawn } from 'node:child_process';
+import { spawn, spawnSync } from 'node:child_process';
 import { mkdtempSync, rmSync } from 'node:fs';
 import { type AddressInfo, createServer } from 'node:net';
 import { tmpdir } from 'node:os';
@@ -40,14 +40,28 @@ async function takenPort() {
   return { port: (server.address() as AddressInfo).port, free: () => new Promise((resolve) => server.close(resolve)) };
 }
 
+/**
+ * Five seconds; on a machine busy with something else as many more as Node.js itself takes longer to start than the
+ * 50 ms it needs on an idle one.
+ */
+function fiveSeconds(): number {
+  const bare = [1, 2, 3].map(() => {
+    const began = performance.now();
+    spawnSync(process.execPath, ['-e', '0']);
+    return performance.now() - began;
+  });
+  return 5000 * Math.max(1, Math.min(...bare) / 50);
+}
+
 describe('npm start', () => {
-  // Tried again where the machine was busy with something else.
+  // Tried again where the machine became busy in between.
   it('is up again in under 5 s where nothing has changed, and stops when asked', { retry: 2 }, async () => {
     const { port, free } = await takenPort();
     await free();
+    const most = fiveSeconds();
     const began = performance.now();
     const code = await start(String(port), async (address, said) => {
-      expect(performance.now() - began).toBeLessThan(5000);
+      expect(performance.now() - began).toBeLessThan(most);
       expect(address).toBe(`http://127.0.0.1:${port}`);
       expect(said).toContain('No sign-in yet');
       expect((await fetch(address)).status).toBe(200);

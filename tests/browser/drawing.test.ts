@@ -45,7 +45,7 @@ describe('the drawing is the form', () => {
 
   test('a size that cannot be read keeps the text and the last good drawing, and says what would work', async () => {
     const { page, context } = await openPage(browser, url);
-    const lines = () => page.locator('.plan svg path.dw-obj').first().getAttribute('d');
+    const lines = () => page.locator('.plan svg clipPath path').first().getAttribute('d');
     const before = await lines();
     await type(page, 'railLength', '26 1/');
     await settle(page);
