@@ -30,12 +30,14 @@ export const LONGEST_LINE = 72;
 /** A comment on its own line, or several where the text is long: broken between words, each closed on its line. */
 export function commentLines(text: string): string[] {
   const room = LONGEST_LINE - 2;
+  const whole = commentText(text);
+  if (whole.length <= room) return whole ? [`(${whole})`] : [];
   const lines: string[] = [];
   let line = '';
-  for (const word of commentText(text).split(' ')) {
+  for (const word of whole.split(' ')) {
     const longer = line ? `${line} ${word}` : word;
     if (longer.length > room && line) lines.push(line);
     line = longer.length > room ? word.slice(0, room) : longer;
   }
-  return [...lines, line].filter(Boolean).map((words) => `(${words})`);
+  return [...lines, line].map((words) => `(${words})`);
 }

@@ -23,12 +23,12 @@ const HIGHEST_NUMBER = 9999;
  * The program's text: %, header, modes, cut, end, %; every option as asked.
  *
  * RS-274 in the NISTIR 6556 dialect, held to what any three-axis controller reads alike. The header is for whoever
- * stands at the machine; without its facts it is a draft that can be read and measured but bears no time or cautions.
+ * stands at the machine; without its facts the text is a draft: the blocks alone, to be read for what the header says.
  */
 export function writeProgram(request: SlotRequest, path: SlotPath, facts: HeaderFacts | null): string {
   const { spec, options } = request;
   const units = options.programUnits ?? spec.units;
-  const header = options.comments ? headerLines(spec, units, path, facts) : [];
+  const header = options.comments && facts ? headerLines(spec, units, path, facts) : [];
   const lines = [...header, ...writeBody(spec, options, path)];
   const numbered = options.lineNumbers ? numberLines(lines) : lines;
   const all = options.percent ? ['%', ...numbered, '%'] : numbered;
@@ -46,7 +46,7 @@ function numberLines(lines: readonly string[]): string[] {
   });
 }
 
-function headerLines(spec: SlotSpec, units: Units, path: SlotPath, facts: HeaderFacts | null): string[] {
+function headerLines(spec: SlotSpec, units: Units, path: SlotPath, facts: HeaderFacts): string[] {
   const size = (value: number) => formatDecimal(convertLength(value, spec.units, units), units, DECIMALS[units]);
   const feed = (value: number) => String(Math.round(convertLength(value, spec.units, units) * 10) / 10);
   const deepest = Math.max(...path.levels.map((level, i) => level - (path.levels[i - 1] ?? 0)));
@@ -63,7 +63,8 @@ function headerLines(spec: SlotSpec, units: Units, path: SlotPath, facts: Header
     'Z ZERO ON TOP OF RAIL',
     `CLAMPS UP TO ${size(spec.clampHeight)}, SAFE HEIGHT ${size(spec.safeHeight)}`,
     `PASSES ${path.levels.length}, EACH AT MOST ${size(deepest)} DEEP`,
-    ...(facts ? [`TIME ABOUT ${timeWords(facts.seconds)}`, ...facts.cautions.map((caution) => `CAUTION ${caution}`)] : []),
+    `TIME ABOUT ${timeWords(facts.seconds)}`,
+    ...facts.cautions.map((caution) => `CAUTION ${caution}`),
   ];
   return [markComment(BLANK_MARK), ...texts.flatMap(commentLines)];
 }

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { LENGTH_HELP, type WrittenLength, formatDecimal, lengthIn, parseLength } from '../measure/length';
 import { UNITS, byUnits } from '../measure/units';
+import { objectError } from '../measure/messages';
 import { type ProgramOptions, programOptionsSchema } from '../program/options';
 import { WOODS } from '../wood/woods';
 import { type GivenSpec, fillDefaults } from './defaults';
@@ -20,8 +21,9 @@ export interface SlotRequest {
 
 /** What the message quotes of a value that cannot be used; long texts are cut. */
 function quote(value: unknown): string {
-  const text = typeof value === 'string' ? `"${value.slice(0, 40)}"` : value === undefined ? 'missing' : String(value).slice(0, 40);
-  return text;
+  if (typeof value === 'string') return `"${value.slice(0, 40)}"`;
+  if (Array.isArray(value)) return 'a list';
+  return typeof value === 'object' && value !== null ? 'an object' : String(value);
 }
 
 const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1);
@@ -34,7 +36,7 @@ const missing = (field: keyof SlotSpec, help: string) => (issue: { readonly inpu
 /** A length: a number in the spec's units, or text in the trade's notation. */
 const size = (field: keyof SlotSpec) =>
   z
-    .union([z.number(), z.string().max(64)], { error: missing(field, LENGTH_HELP) })
+    .union([z.number(), z.string()], { error: missing(field, LENGTH_HELP) })
     .transform((value, context): WrittenLength => {
       if (typeof value === 'number') return { value, units: null };
       const written = parseLength(value);
@@ -54,13 +56,13 @@ const choice = <const Values extends readonly [string, ...string[]]>(field: keyo
 const limit = (what: string, most: number) => z.number({ error: `Give ${what} as a number.` }).positive({ error: `Give ${what} as a number above 0.` }).max(most, { error: `Give ${what} as ${most} or less.` });
 
 const machineSchema = z.strictObject({
-  travel: z.strictObject({ x: limit('travel along X', 1e5), y: limit('travel along Y', 1e5), z: limit('travel along Z', 1e5) }).optional(),
+  travel: z.strictObject({ x: limit('travel along X', 1e5), y: limit('travel along Y', 1e5), z: limit('travel along Z', 1e5) }, { error: objectError('travel as x, y and z') }).optional(),
   topFeed: limit('the top feed', 1e5).optional(),
   acceleration: limit('the acceleration', 1e6).optional(),
-  spindleRange: z.tuple([limit('the lowest spindle speed', 1e5), limit('the highest spindle speed', 1e5)])
+  spindleRange: z.tuple([limit('the lowest spindle speed', 1e5), limit('the highest spindle speed', 1e5)], { error: 'Give the spindle range as two numbers, lowest then highest.' })
     .refine(([low, high]) => low <= high, { error: 'Give the spindle range as lowest, then highest.' }).optional(),
   heavy: z.boolean({ error: 'Give heavy as true or false.' }).optional(),
-});
+}, { error: objectError('the machine as an object with travel, topFeed, acceleration, spindleRange or heavy') });
 
 /** A name goes into the program's header and its file name; longer ones would not fit a line there. */
 const LONGEST_NAME = 60;
@@ -140,9 +142,7 @@ const fieldNames = Object.keys(FIELDS) as readonly (keyof SlotSpec)[];
  */
 export const slotRequestSchema = z
   .strictObject(shape, {
-    error: (issue) => issue.code === 'unrecognized_keys'
-      ? `There is no field called ${issue.keys?.map((key: string) => quote(key)).join(', ')}. Check its spelling.`
-      : 'Send one JSON object with the slot spec.',
+    error: objectError('one JSON object with the slot spec'),
   })
   .superRefine(
     (value, context) => {

@@ -39,7 +39,7 @@ export const rapids: Rule = (cut) => {
   let into: Motion | null = null;
   for (const motion of cut.motions) {
     const { from, to } = motion;
-    if (motion.kind !== 'rapid' || isUnknown(from)) continue;
+    if (motion.kind !== 'rapid' || Number.isNaN(from.z)) continue;
     if (to.z <= 0 && to.z < from.z) into ??= motion;
     const low = Math.min(from.z, to.z);
     if ((from.x !== to.x || from.y !== to.y) && low < lowest) [lowest, worst] = [low, motion];

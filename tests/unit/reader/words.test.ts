@@ -14,9 +14,8 @@ function ours(text: string): [string, number][][] {
   return read.blocks.map(({ words }) => words.map(({ letter, value }): [string, number] => [letter, value])).filter((words) => words.length > 0);
 }
 
-function theirs(text: string): [string, number][][] {
-  const lines: { words: [string, number][] }[] = parseStringSync(text);
-  return lines.map(({ words }) => words).filter((words) => words.length > 0);
+function theirs(text: string): (readonly [string, number | string])[][] {
+  return parseStringSync(text).map(({ words }) => [...words]).filter((words) => words.length > 0);
 }
 
 const decimal = fc.tuple(fc.constantFrom('', '-', '+'), fc.nat(99999), fc.nat(6)).map(([sign, digits, places]) => {
