@@ -11,14 +11,18 @@ export function formatFeed(feed: number): string {
   return (Math.floor(feed * 10 + 1e-6) / 10).toFixed(1);
 }
 
+/** What keeps a text from being comment text as it stands; most of a header has none of it. */
+const UNFIT = /[^A-Z0-9 .,+'-]|  |^ | $/;
+
 /**
  * A person's text as comment text: upper-case ASCII, and none of the characters that could close the comment or be
  * read as a word, a delimiter or a block delete where a controller reads comments loosely.
  */
 export function commentText(text: string): string {
-  return text
+  const plain = text.toUpperCase();
+  if (!UNFIT.test(plain)) return plain;
+  return plain
     .normalize('NFKD')
-    .toUpperCase()
     .replace(/[^A-Z0-9 .,+'-]+/g, ' ')
     .replace(/ {2,}/g, ' ')
     .trim();

@@ -23,8 +23,9 @@ export class PieceIndex {
       back = Math.max(back, y0, y1);
     }
     [this.left, this.front] = [left, front];
-    this.columns = Math.max(1, Math.min(MOST_CELLS, Math.floor((right - left) / (2 * radius))));
-    this.rows = Math.max(1, Math.min(MOST_CELLS, Math.floor((back - front) / (2 * radius))));
+    const most = Math.min(MOST_CELLS, pieces.length >> 3); // few pieces are sooner tried than filed
+    this.columns = Math.max(1, Math.min(most, Math.floor((right - left) / (2 * radius))));
+    this.rows = Math.max(1, Math.min(most, Math.floor((back - front) / (2 * radius))));
     this.width = (right - left) / this.columns || 1;
     this.height = (back - front) / this.rows || 1;
     pieces.forEach((piece, order) => {

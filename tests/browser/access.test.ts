@@ -18,6 +18,8 @@ describe('for everyone, on every screen', () => {
     const { page, context } = await openPage(browser, url, { colorScheme });
     expect(await page.locator('html').getAttribute('data-theme')).toBe(colorScheme === 'dark' ? 'night' : 'day');
     await page.locator('summary').click();
+    await page.locator('.lines').scrollIntoViewIfNeeded();
+    await page.getByRole('slider', { name: 'Time in the program' }).waitFor(); // playback is part of what is judged
     expect(await violations(page)).toEqual([]);
     await type(page, 'bitDiameter', '1/2');
     await type(page, 'depth', 'abc');

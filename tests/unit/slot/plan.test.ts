@@ -121,7 +121,9 @@ describe('a slot no longer than its bit', () => {
   const { spec } = asked({ ...RAIL_A, length: 0.375, width: 0.375, bitDiameter: 0.375, ends: 'round' });
 
   it('is bored straight down, pass by pass', () => {
-    const { moves, levels } = planSlot(spec, 1e-4);
-    expect(moves.map(({ role }) => role)).toEqual(levels.map(() => 'plunge'));
+    const { start, moves, levels } = planSlot(spec, 1e-4);
+    const plunges = moves.filter(({ role }) => role === 'plunge');
+    expect(plunges.map(({ to }) => -to.z)).toEqual(levels);
+    for (const { to } of moves) expect([to.x, to.y]).toEqual([start.x, start.y]);
   });
 });
