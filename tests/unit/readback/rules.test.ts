@@ -29,7 +29,7 @@ const FIRES: Readonly<Record<RuleName, { readonly severity: Severity; readonly l
   length: { severity: 'disagrees', line: 13, measured: 16.499 },
   width: { severity: 'disagrees', line: 14, measured: 0.499 },
   depth: { severity: 'disagrees', line: 18, measured: 0.1885 },
-  stopMargin: { severity: 'disagrees', line: 11, measured: [1.251, 1.249] },
+  stopMargin: { severity: 'disagrees', line: 13, measured: [1.251, 1.249] },
   outside: { severity: 'disagrees', line: 22, measured: 0.001 },
   cleared: { severity: 'disagrees', line: 25, measured: 'not all' },
   floor: { severity: 'disagrees', line: 20, measured: 0.0008 },
@@ -40,7 +40,7 @@ const FIRES: Readonly<Record<RuleName, { readonly severity: Severity; readonly l
   cuttingLength: { severity: 'caution', line: 12, measured: 0.1875, reason: 'shank' },
   entry: { severity: 'disagrees', line: 12 },
   laps: { severity: 'disagrees', line: 12, measured: 'conventional' },
-  retracts: { severity: 'disagrees', line: 27, measured: 2 },
+  retracts: { severity: 'disagrees', line: 26, measured: 2 },
   start: { severity: 'disagrees', line: 9 },
   rapids: { severity: 'disagrees', line: 12, measured: 0.2 },
   clamps: { severity: 'disagrees', line: 11, measured: -0.075 },
@@ -123,7 +123,7 @@ describe('the verdict', () => {
     expect(read.ok).toBe(false);
     const { verdict, findings } = unreadable(read.ok ? { code: 'noEnd', at: { line: 0, column: 0 }, reason: '' } : read.error);
     expect(verdict).toBe('disagrees');
-    expect(findings).toEqual([expect.objectContaining({ rule: 'read', severity: 'disagrees', at: { line: 2, column: 8 }, measured: null })]);
+    expect(findings).toEqual([expect.objectContaining({ rule: 'read', severity: 'disagrees', at: { line: 2, column: 9 }, measured: null })]);
     expect(findings[0]?.reason).toMatch(/[Pp]arameter/);
   });
 });
