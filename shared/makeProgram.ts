@@ -3,10 +3,11 @@ import { convertLength } from './measure/units';
 import { GRID } from './program/grid';
 import { markIn, programMark, sha256Hex } from './program/mark';
 import { programFileName, writeProgram } from './program/write';
-import { type ReadProgram, type Step, readProgram } from './reader';
+import { type ReadResult, type Step, readProgram } from './reader';
 import { stepsIn } from './reader/inUnits';
 import type { Readback } from './readback/finding';
 import { readBack, unreadable } from './readback/readBack';
+import { linesBetween, movedDown } from './readback/sameSteps';
 import { sentenceOf } from './readback/sentences';
 import { type ChipLoadBand, advisedChipLoad, chipLoad } from './slot/chipLoad';
 import type { SlotPath } from './slot/path';
@@ -62,8 +63,9 @@ export type MadeProgram =
 /**
  * From a slot request to a program that has been read back: plan, write, read, measure.
  *
- * A draft is read first, since only a reading can tell the time and the cautions that the header bears; then the
- * final text is read and measured by itself, and only what it says counts.
+ * The blocks alone are read and measured first, since only a reading can tell the time and the cautions that the
+ * header bears. Then the final text is read by itself: where every step of it is the measured one, what was measured
+ * holds; where any differs it is measured anew.
  *
  * @returns the text only if no reading disagrees.
  */
@@ -72,38 +74,37 @@ export function makeProgram(request: SlotRequest): MadeProgram {
   const units = options.programUnits ?? spec.units;
   const path = planSlot(spec, convertLength(GRID[units], units, spec.units));
 
-  const draft = measure(writeProgram(request, path, null), request);
-  const cautions = draft.readback.findings.flatMap((finding) => sentenceOf(finding, spec.units).header ?? []);
-  const program = writeProgram(request, path, { seconds: draft.timeline.seconds, cautions });
-  const final = measure(program, request);
+  const draft = read(writeProgram(request, path, null), request);
+  const measured = measure(draft, request);
+  const facts = { seconds: timed(draft, spec).seconds, cautions: measured.findings.flatMap((finding) => sentenceOf(finding, spec.units).header ?? []) };
+  const program = writeProgram(request, path, facts);
+  const final = read(program, request);
+  const lines = draft.ok && final.ok ? linesBetween(draft.program.steps, final.program.steps) : null;
+  const readback = lines === null ? measure(final, request) : movedDown(measured, lines);
 
-  const made = { spec, summary: summarise(request, path, final), readback: final.readback, steps: final.steps, timeline: final.timeline };
-  if (final.readback.verdict === 'disagrees') return { ok: false, ...made };
+  const timeline = timed(final, spec);
+  const summary = summarise(request, path, timeline, final.ok ? final.program.lines : 0);
+  const made = { spec, summary, readback, steps: timeline.steps, timeline };
+  if (readback.verdict === 'disagrees') return { ok: false, ...made };
   const mark = programMark(program);
   assert(!options.comments || markIn(program) === mark, 'the text bears its own mark');
   return { ok: true, program, fileName: programFileName(spec, mark, options.fileEnding), mark, sha256: sha256Hex(program), ...made };
 }
 
-interface Measured {
-  readonly readback: Readback;
-  readonly steps: readonly Step[];
-  readonly timeline: Timeline;
-  readonly lines: number;
+function read(text: string, { options }: SlotRequest): ReadResult {
+  return readProgram(text, { dwellIn: options.spindleWait === 'milliseconds' ? 'milliseconds' : 'seconds' });
 }
 
-function measure(text: string, { spec, options, assumed }: SlotRequest): Measured {
-  const read = readProgram(text, { dwellIn: options.spindleWait === 'milliseconds' ? 'milliseconds' : 'seconds' });
-  const program: ReadProgram | null = read.ok ? read.program : null;
-  const steps = program ? stepsIn(spec.units, program) : [];
-  return {
-    readback: read.ok ? readBack(read.program, spec, assumed.includes('railWidth')) : unreadable(read.error),
-    steps,
-    timeline: timeOf(steps, defaultDynamics(spec.units, spec.machine)),
-    lines: program?.lines ?? 0,
-  };
+function measure(result: ReadResult, { spec, assumed }: SlotRequest): Readback {
+  return result.ok ? readBack(result.program, spec, assumed.includes('railWidth')) : unreadable(result.error);
 }
 
-function summarise({ spec, assumed, notes }: SlotRequest, path: SlotPath, { timeline, lines }: Measured): ProgramSummary {
+/** How long the steps take, in the spec's units. */
+function timed(result: ReadResult, spec: SlotSpec): Timeline {
+  return timeOf(result.ok ? stepsIn(spec.units, result.program) : [], defaultDynamics(spec.units, spec.machine));
+}
+
+function summarise({ spec, assumed, notes }: SlotRequest, path: SlotPath, timeline: Timeline, lines: number): ProgramSummary {
   const edge = Math.PI * spec.bitDiameter * spec.spindleSpeed;
   const rate = spec.bitDiameter * spec.stepdown * spec.feed;
   return {

@@ -12,7 +12,7 @@ export function formatFeed(feed: number): string {
 }
 
 /** What keeps a text from being comment text as it stands; most of a header has none of it. */
-const UNFIT = /[^A-Z0-9 .,+'-]|  |^ | $/;
+const UNFIT = /[^A-Z0-9 .,+'-]| {2}|^ | $/;
 
 /**
  * A person's text as comment text: upper-case ASCII, and none of the characters that could close the comment or be

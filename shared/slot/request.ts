@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { LENGTH_HELP, type WrittenLength, formatDecimal, lengthIn, parseLength } from '../measure/length';
 import { UNITS, byUnits } from '../measure/units';
 import { objectError } from '../measure/messages';
-import { type ProgramOptions, programOptionsSchema } from '../program/options';
+import { DEFAULT_OPTIONS, type ProgramOptions, programOptionsSchema } from '../program/options';
 import { WOODS } from '../wood/woods';
 import { type GivenSpec, fillDefaults } from './defaults';
 import { FIELDS } from './fields';
@@ -110,18 +110,21 @@ const shape = {
 
 type Shape = z.output<z.ZodObject<typeof shape>>;
 
-/** The spec in its own units; a field in `unreadable` becomes NaN, which no rule's comparison meets. */
-function given(value: Shape, unreadable: ReadonlySet<PropertyKey>): GivenSpec {
-  const lengths = Object.fromEntries(
-    LENGTH_FIELDS.map((field) => {
-      const written = value[field];
-      if (unreadable.has(field) || unreadable.has('units')) return [field, NaN];
-      return [field, written && lengthIn(value.units, written)];
-    }),
-  );
-  const rest = Object.fromEntries(Object.entries(value).filter(([key]) => !unreadable.has(key)));
-  return { ...rest, ...lengths, units: unreadable.has('units') ? 'in' : value.units } as GivenSpec;
+/** The spec in its own units, defaults filled; a field in `unreadable` is left to its default, a size becomes NaN, which no rule's comparison meets. */
+function fill(value: Shape, unreadable: ReadonlySet<PropertyKey>): SlotSpec {
+  const units = unreadable.has('units') ? 'in' : value.units;
+  const given: Record<string, unknown> = { ...value, units };
+  for (const field of unreadable) if (typeof field === 'string') given[field] = undefined;
+  for (const field of LENGTH_FIELDS) {
+    const written = value[field];
+    if (unreadable.has(field) || unreadable.has('units')) given[field] = NaN;
+    else given[field] = written && lengthIn(units, written);
+  }
+  return fillDefaults(given as unknown as GivenSpec);
 }
+
+/** Nothing unreadable. */
+const NONE: ReadonlySet<PropertyKey> = new Set();
 
 function conversions(value: Shape): string[] {
   return LENGTH_FIELDS.flatMap((field) => {
@@ -148,7 +151,7 @@ export const slotRequestSchema = z
     (value, context) => {
       if (context.issues.some((issue) => issue.code === 'invalid_type' && !issue.path?.length)) return;
       const unreadable = new Set(context.issues.map((issue) => issue.path?.[0] ?? ''));
-      for (const { field, message } of findProblems(fillDefaults(given(value, unreadable)), value.options?.chordTolerance)) {
+      for (const { field, message } of findProblems(fill(value, unreadable), value.options?.chordTolerance)) {
         context.addIssue({ code: 'custom', path: [field], message });
       }
       const most = byUnits(value.units, 0.0005, 0.01); // the finished slot is the asked one to within this
@@ -160,8 +163,8 @@ export const slotRequestSchema = z
     { when: () => true },
   )
   .transform((value): SlotRequest => ({
-    spec: fillDefaults(given(value, new Set())),
-    options: value.options ?? programOptionsSchema.parse({}),
+    spec: fill(value, NONE),
+    options: value.options ?? DEFAULT_OPTIONS,
     assumed: fieldNames.filter((field) => value[field] === undefined),
     notes: conversions(value),
   }));

@@ -4,7 +4,7 @@ import { isOneBit } from '../../slot/spec';
 import { type Cut, piecesBelow } from '../cut';
 import { deepestCut } from '../depthOfCut';
 import type { Finding } from '../finding';
-import { type Rule, finding } from './rule';
+import { type Rule, finding, placeOf } from './rule';
 import { pastSlot } from './slotShape';
 
 /**
@@ -77,26 +77,31 @@ export const entry: Rule = (cut) => {
   });
 };
 
-/** Which way the long sides are cut, with the spindle clockwise: rightwards in front and leftwards behind climbs. */
+/**
+ * Which way the laps run. A piece belongs to a lap where it keeps its distance from the slot's edge; with the spindle
+ * clockwise it climbs where it goes counterclockwise about the slot's middle (the cut edge lies on its right).
+ */
 export const laps: Rule = (cut) => {
-  const { spec } = cut;
+  const { spec, step } = cut;
   if (isOneBit(spec)) return null;
-  const middle = spec.railWidth / 2;
-  const wall = (spec.width - spec.bitDiameter) / 2;
-  const long = cut.pieces.filter((p) => p.y0 === p.y1 && Math.abs(p.x1 - p.x0) > spec.bitDiameter && Math.abs(p.y0 - middle) > 2 * cut.step);
-  let wrong = null;
-  const senses = { climb: 0, conventional: 0 };
-  for (const piece of long) {
-    const sense = (piece.x1 > piece.x0) === (piece.y0 < middle) ? 'climb' : 'conventional';
-    const finishing = spec.finishAllowance > 0 && Math.abs(piece.y0 - middle) > wall - spec.finishAllowance / 2;
-    senses[sense] += 1;
-    if (sense !== (finishing ? 'climb' : spec.direction)) wrong ??= piece;
-  }
-  if (long.length === 0) return null;
-  const measured = senses.climb === 0 ? 'conventional' : senses.conventional === 0 ? 'climb' : 'both ways';
-  const wanted = spec.finishAllowance > 0 && spec.direction === 'conventional' ? 'both ways' : spec.direction;
-  return finding('laps', wrong ? 'disagrees' : 'agrees', 'words', (wrong ?? long[0])?.motion.at ?? cut.whole, {
-    wanted, measured, point: wrong && { x: wrong.x1, y: wrong.y1, z: wrong.z1 },
+  const [cx, cy] = [cut.railLength / 2, spec.railWidth / 2];
+  const along = cut.pieces.flatMap((piece) => {
+    if (piece.z0 !== piece.z1) return []; // a ramp may come back over itself
+    const [from, middle, to] = [0.1, 0.5, 0.9].map((t) => ({ x: piece.x0 + t * (piece.x1 - piece.x0) - cx, y: piece.y0 + t * (piece.y1 - piece.y0) - cy }));
+    if (!from || !middle || !to) return [];
+    const past = [from, middle, to].map(({ x, y }) => pastSlot(cut, x + cx, y + cy) + spec.bitDiameter / 2);
+    if (Math.max(...past) - Math.min(...past) > 2 * step || Math.hypot(to.x - from.x, to.y - from.y) < spec.bitDiameter / 4) return [];
+    const inset = -(past[1] ?? 0);
+    if (inset > (spec.width - spec.bitDiameter) / 2 - 2 * step) return []; // the middle line has no side
+    return [{ piece, climbs: from.x * to.y - from.y * to.x > 0, finishes: spec.finishAllowance > 0 && inset < spec.finishAllowance / 2 }];
+  });
+  const wrong = along.find(({ climbs, finishes }) => climbs !== (finishes || spec.direction === 'climb'));
+  if (along.length === 0) return null;
+  const climbing = along.filter(({ climbs }) => climbs).length;
+  const measured = climbing === 0 ? 'conventional' : climbing === along.length ? 'climb' : 'both ways';
+  const wanted = spec.finishAllowance > 0 && spec.direction === 'conventional' ? 'conventional, climb at the wall' : spec.direction;
+  return finding('laps', wrong ? 'disagrees' : 'agrees', 'words', (wrong ?? along[0])?.piece.motion.at ?? cut.whole, {
+    wanted, measured: !wrong && measured === 'both ways' ? wanted : measured, point: placeOf(cut, wrong?.piece).point,
   });
 };
 

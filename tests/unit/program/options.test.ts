@@ -2,6 +2,7 @@ import { afterEach, describe, expect, it, vi } from 'vitest';
 import { type MadeProgram, makeProgram } from '#shared/makeProgram';
 import { DEFAULT_OPTIONS, programOptionsSchema } from '#shared/program/options';
 import { programFileName } from '#shared/program/write';
+import type { RawSpec } from '../../support/randomSpecs';
 import { type JudgedOptions, expectSoundCut } from '../../support/soundCut/index';
 import { RAIL_A, RAIL_MM, asked } from '../slot/asking';
 
@@ -11,7 +12,7 @@ const ROUND_MM = { ...RAIL_MM, ends: 'round' } as const;
 type Good = Extract<MadeProgram, { ok: true }>;
 
 /** Makes a program, and has it judged by what the options say it must be. */
-function make(raw: Parameters<typeof expectSoundCut>[1], options: JudgedOptions & { fileEnding?: string } = {}): Good {
+function make(raw: RawSpec, options: JudgedOptions & { fileEnding?: string } = {}): Good {
   const made = makeProgram(asked({ ...raw, options }));
   if (!made.ok) throw new Error(`disagrees: ${made.readback.findings.filter(({ severity }) => severity === 'disagrees').map(({ rule }) => rule).join(', ')}`);
   expectSoundCut(made.program, raw, options);

@@ -69,7 +69,7 @@ const CASES: readonly Case[] = [
 ];
 
 describe('why a rule says what it says', () => {
-  it.each(CASES)('%s', (_what, rule, severity, reason, edits, spec) => {
+  it.each(CASES.map((one) => ({ what: one[0], one })))('$what', ({ one: [, rule, severity, reason, edits, spec] }) => {
     const finding = findingOf(rule, edits, spec);
     expect([finding?.severity, finding?.reason]).toEqual([severity, reason]);
   });

@@ -39,7 +39,7 @@ const FIRES: Readonly<Record<RuleName, { readonly severity: Severity; readonly l
   passDepth: { severity: 'disagrees', line: 12, measured: 0.0948 },
   cuttingLength: { severity: 'caution', line: 12, measured: 0.1875, reason: 'shank' },
   entry: { severity: 'disagrees', line: 12 },
-  laps: { severity: 'disagrees', line: 12, measured: 'conventional' },
+  laps: { severity: 'disagrees', line: 13, measured: 'conventional' },
   retracts: { severity: 'disagrees', line: 26, measured: 2 },
   start: { severity: 'disagrees', line: 9 },
   rapids: { severity: 'disagrees', line: 12, measured: 0.2 },
