@@ -1,3 +1,4 @@
+import type { Point3 } from '../geometry/point';
 import type { Step } from '../reader/motion';
 import type { Readback } from './finding';
 
@@ -8,17 +9,29 @@ import type { Readback } from './finding';
  */
 export function linesBetween(first: readonly Step[], second: readonly Step[]): number | null {
   const lines = (second[0]?.at.line ?? 0) - (first[0]?.at.line ?? 0);
+  let modes: readonly [Step['modes'], Step['modes']] | null = null; // a pair found equal: steps share them until a block changes them
   const same = first.length === second.length && first.every((step, i) => {
     const other = second[i];
-    return other !== undefined && other.at.line - step.at.line === lines && sameStep(step, other);
+    if (other === undefined || other.at.line - step.at.line !== lines) return false;
+    if (modes?.[0] !== step.modes || modes[1] !== other.modes) {
+      if (!sameData(step.modes, other.modes)) return false;
+      modes = [step.modes, other.modes];
+    }
+    return sameAct(step, other);
   });
   return same ? lines : null;
 }
 
-function sameStep(a: Step, b: Step): boolean {
-  if (a.kind !== b.kind || !sameData(a.modes, b.modes)) return false;
-  if (!('to' in a) || !('to' in b)) return sameData({ ...a, at: null, modes: null }, { ...b, at: null, modes: null });
-  return a.feed === b.feed && sameData(a.from, b.from) && sameData(a.to, b.to) && sameData(a.arc, b.arc);
+/** Two steps but for their places and modes. */
+function sameAct(a: Step, b: Step): boolean {
+  if ('to' in a && 'to' in b) {
+    return a.kind === b.kind && a.feed === b.feed && samePoint(a.from, b.from) && samePoint(a.to, b.to) && (a.arc === b.arc || sameData(a.arc, b.arc));
+  }
+  return sameData({ ...a, at: null, modes: null }, { ...b, at: null, modes: null });
+}
+
+function samePoint(a: Point3, b: Point3): boolean {
+  return Object.is(a.x, b.x) && Object.is(a.y, b.y) && Object.is(a.z, b.z);
 }
 
 /** Plain data, compared all the way down; NaN is NaN. */

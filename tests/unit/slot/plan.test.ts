@@ -24,9 +24,9 @@ describe.each([['in', 1e-4], ['mm', 1e-3]] as const)('any slot planned in %s', (
       expect(Math.max(...passes) - Math.min(...passes)).toBeLessThanOrEqual(grid * 1.001);
       // Half the last decimal may be added to a pass (issue, "The plan").
       expect(Math.max(...passes)).toBeLessThanOrEqual(stepdown + grid / 2 + 1e-9);
-      const fewest = Math.ceil((depth - grid / 2) / (stepdown + grid / 2) - 1e-9);
-      expect(passes.length).toBeLessThanOrEqual(fewest + 1);
-      if (passes.length > 1) expect((passes.length - 1) * Math.floor(stepdown / grid + 0.5) * grid).toBeLessThan(depth + grid);
+      // In whole steps of the last decimal: a depth within half a step, over passes of at most the stepdown and half a step.
+      const fewest = Math.ceil(Math.ceil(depth / grid - 0.5 - 1e-6) / Math.max(1, Math.floor(stepdown / grid + 0.5 + 1e-6)));
+      expect(passes.length).toBe(fewest);
     });
   });
 
