@@ -11,8 +11,8 @@ import { formatFeed, formatSteps } from './words';
 const RADIUS_TOLERANCE: Readonly<Record<Units, number>> = { in: 0.0001, mm: 0.001 };
 /** Decimals beyond the usual that an arc's centre may need; at six an inch program is exact to a light wave. */
 const MOST_DECIMALS = 6;
-/** Of the chord tolerance: the rest is left for rounding the points. */
-const CHORD_SHARE = 0.8;
+/** Of the chord tolerance: the rest is left for rounding the slot's edges and the chords' ends to the last decimal. */
+const CHORD_SHARE = 0.6;
 
 /** Writes motion blocks one by one: rounds each coordinate once, and leaves out words that would change nothing. */
 class Blocks {

@@ -18,21 +18,21 @@ export function markComment(mark: string): string {
 
 /** The mark that a program's text bears, or null. */
 export function markIn(text: string): string | null {
-  return IN_TEXT.exec(text.replace(/\r/g, ''))?.[2] ?? null;
+  return IN_TEXT.exec(bareText(text))?.[2] ?? null;
 }
 
-/**
- * The text that a mark stands for: the mark blanked, and without what may change on the way to a machine: N words,
- * % lines, blanks outside comments, line endings. Comments count.
- */
-export function markedText(text: string): string {
+/** A text without what may change on its way to a machine: N words, % lines, blanks outside comments, line endings. */
+function bareText(text: string): string {
   return text
-    .replace(/\r\n?/g, '\n')
-    .replace(IN_TEXT, `$1${BLANK_MARK}$3`)
-    .split('\n')
+    .split(/\r\n?|\n/)
     .map((line) => line.replace(/\([^)]*\)|[ \t]+/g, (part) => (part.startsWith('(') ? part : '')).replace(/^N\d+/i, ''))
     .filter((line) => line !== '' && line !== '%')
     .join('\n');
+}
+
+/** The text that a mark stands for: bare, and with the mark blanked. Comments count. */
+export function markedText(text: string): string {
+  return bareText(text).replace(IN_TEXT, `$1${BLANK_MARK}$3`);
 }
 
 /**

@@ -23,6 +23,7 @@ export function commentText(text: string): string {
   if (!UNFIT.test(plain)) return plain;
   return plain
     .normalize('NFKD')
+    .replace(/\p{M}+/gu, '') // accents
     .replace(/[^A-Z0-9 .,+'-]+/g, ' ')
     .replace(/ {2,}/g, ' ')
     .trim();
@@ -38,10 +39,10 @@ export function commentLines(text: string): string[] {
   if (whole.length <= room) return whole ? [`(${whole})`] : [];
   const lines: string[] = [];
   let line = '';
-  for (const word of whole.split(' ')) {
+  for (const word of whole.split(' ').flatMap((long) => long.match(new RegExp(`.{1,${room}}`, 'g')) ?? [])) {
     const longer = line ? `${line} ${word}` : word;
     if (longer.length > room && line) lines.push(line);
-    line = longer.length > room ? word.slice(0, room) : longer;
+    line = longer.length > room ? word : longer;
   }
   return [...lines, line].map((words) => `(${words})`);
 }

@@ -12,8 +12,8 @@ export interface Deepest {
   readonly point: Point3 | null;
 }
 
-/** Most places looked at along one piece; the depth of cut changes only where an earlier piece begins or ends. */
-const MOST_PLACES = 12;
+/** Places nearer along a piece than this share of the radius see the same wood: no fin so thin stands in a slot. */
+const SAME_PLACE = 1 / 8;
 
 /**
  * The greatest depth of cut of a program: how far the wood that earlier pieces left stands above the cutter.
@@ -33,7 +33,7 @@ export function deepestCut(
   pieces.forEach((piece, order) => {
     // No cut is deeper than the piece is below the top, so most pieces of a first pass need no second look.
     if (-Math.min(piece.z0, piece.z1) <= deepest.depth + NOISE) return;
-    for (const t of places(piece, order, index, radius)) {
+    for (const t of places(piece, order, index, radius, deepest.depth + NOISE)) {
       const at = along(piece, t);
       for (const [nx, ny] of across(piece)) {
         const line = { at, nx, ny, radius, ...span(at, nx, ny, radius, within) };
@@ -60,21 +60,48 @@ function across({ x0, y0, x1, y1 }: Piece): readonly (readonly [number, number])
   return length === 0 ? [[1, 0], [0, 1]] : [[-(y1 - y0) / length, (x1 - x0) / length]];
 }
 
-/** Fractions along a piece where what earlier pieces left may change: their ends, and its own. */
-function places(piece: Piece, order: number, index: PieceIndex, radius: number): number[] {
+/**
+ * Fractions along a piece where it may cut deeper than `depth`.
+ *
+ * Stretches that an earlier piece ran along, no more than that above, are left out: in a cut that goes down pass by
+ * pass that is nearly all. On the rest, what earlier pieces left changes only where the sweep of one begins or ends,
+ * so these places are looked at, and the middle between each two.
+ */
+function places(piece: Piece, order: number, index: PieceIndex, radius: number, depth: number): number[] {
   const [dx, dy] = [piece.x1 - piece.x0, piece.y1 - piece.y0];
-  const square = dx * dx + dy * dy;
-  if (square < radius * radius / 16) return [0.5, 1]; // shorter than an eighth of the bit: the wood cannot change much
-  const found = [0, 0.5, 1];
-  const same = radius / Math.sqrt(square) / 8; // an eighth of the radius: nearer places see the same wood
-  for (const other of index.newestFirst(along(piece, 0.5), order, Math.sqrt(square) / 2 + radius)) {
-    if (found.length >= MOST_PLACES) break;
-    for (const [x, y] of [[other.x0, other.y0], [other.x1, other.y1]] as const) {
-      const t = ((x - piece.x0) * dx + (y - piece.y0) * dy) / square;
-      if (t > 0 && t < 1 && found.every((known) => Math.abs(known - t) > same)) found.push(t);
-    }
+  const length = Math.hypot(dx, dy);
+  if (length === 0) return [1];
+  const project = (x: number, y: number) => ((x - piece.x0) * dx + (y - piece.y0) * dy) / (length * length);
+  let open: (readonly [number, number])[] = [[0, 1]];
+  const bends: number[] = [];
+  for (const other of index.newestFirst(along(piece, 0.5), order, length / 2 + radius)) {
+    const [a, b] = [project(other.x0, other.y0), project(other.x1, other.y1)];
+    bends.push(a, b, a - radius / length, a + radius / length, b - radius / length, b + radius / length);
+    if (Math.abs(offLine(piece, other.x0, other.y0)) > NOISE || Math.abs(offLine(piece, other.x1, other.y1)) > NOISE) continue;
+    const [from, to] = [Math.min(a, b), Math.max(a, b)];
+    const above = (t: number) => heightNear(other, along(piece, t).x, along(piece, t).y) - along(piece, t).z;
+    if (Math.max(above(Math.max(0, from)), above(Math.min(1, to))) > depth) continue;
+    open = without(open, from, to);
+    if (open.length === 0) return [];
   }
-  return found;
+  const apart = (SAME_PLACE * radius) / length;
+  return open.flatMap(([from, to]) => {
+    const inside = [from, ...bends.filter((t) => t > from && t < to).sort((a, b) => a - b), to];
+    const kept = inside.filter((t, i) => i === 0 || i === inside.length - 1 || t - (inside[i - 1] ?? 0) > apart);
+    return kept.flatMap((t, i) => (i === 0 ? [t] : [(t + (kept[i - 1] ?? t)) / 2, t]));
+  });
+}
+
+/** How far a point lies beside the line of a piece. */
+function offLine({ x0, y0, x1, y1 }: Piece, x: number, y: number): number {
+  return ((x1 - x0) * (y - y0) - (y1 - y0) * (x - x0)) / Math.hypot(x1 - x0, y1 - y0);
+}
+
+/** Stretches less one. */
+function without(open: readonly (readonly [number, number])[], from: number, to: number): (readonly [number, number])[] {
+  return open.flatMap(([low, high]) =>
+    to <= low || from >= high ? [[low, high] as const] : [...(from > low ? [[low, from] as const] : []), ...(to < high ? [[to, high] as const] : [])],
+  );
 }
 
 /** The line across the cutter at a place: points `at` + u (nx, ny), of which those from `low` to `high` count. */
@@ -131,9 +158,7 @@ function coversAbove(line: Line, order: number, index: PieceIndex, depth: number
     covers.push({ from, to, piece });
     // Heights run evenly along the stretch, so its two ends bound them.
     if (Math.max(heightAt(line, from, piece), heightAt(line, to, piece)) - line.at.z > depth) continue;
-    open = open.flatMap(([low, high]) =>
-      to <= low || from >= high ? [[low, high] as const] : [...(from > low ? [[low, from] as const] : []), ...(to < high ? [[to, high] as const] : [])],
-    );
+    open = without(open, from, to);
     if (open.reduce((sum, [low, high]) => sum + high - low, 0) <= narrow) return null;
   }
   return covers;

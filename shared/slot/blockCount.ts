@@ -16,10 +16,11 @@ const AROUND = 60;
  */
 export function countBlocks(spec: SlotSpec, chordTolerance = 0): number {
   const grid = GRID[spec.units];
-  // A pass count past the limit is refused before anything of that length is built.
-  if (spec.depth / Math.max(spec.stepdown, grid) > MOST_BLOCKS) return Math.ceil(spec.depth / spec.stepdown);
-  const step = spec.stepover * spec.bitDiameter;
-  if (spec.width / step > MOST_BLOCKS) return Math.ceil(spec.width / step);
+  // Passes and laps are multiplied before any is laid out: a count far past the limit must not cost what it counts.
+  const passes = Math.ceil(spec.depth / Math.max(spec.stepdown, grid));
+  const laps = Math.ceil((spec.width - spec.bitDiameter) / 2 / (spec.stepover * spec.bitDiameter));
+  const least = passes * Math.max(1, 4 * laps);
+  if (least > MOST_BLOCKS) return least;
 
   const layout = layOut(spec, grid);
   const radius = layout.area.round ? Math.max(layout.area.halfWidth, grid) : 0;

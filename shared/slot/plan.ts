@@ -38,7 +38,7 @@ export function planSlot(spec: SlotSpec, grid: number): SlotPath {
     const last = i === passes.length - 1;
     const { at, side } = opening.pass(i, level, last);
     const outermost = others.reduce((from, lap) => goRound(lap, side, from, level, 'pass', go), at);
-    if (finish && finishing.has(i)) goFinish(finish, outermost, level, spec, go);
+    if (finish && finishing.has(i)) goFinish(finish, layout.area.middle, outermost, level, spec, go);
     if (!last) go(at, level, 'pass');
   });
 
@@ -62,10 +62,10 @@ function finishPasses(levels: readonly number[], tallest: number): Set<number> {
  * On to the wall along a shallow lead, once round it climbing, and off it again so that the retract leaves no mark.
  * The lead is along the long side with more room for it, or the nearer of two; it starts where roughing has been.
  */
-function goFinish(lap: Lap, from: Point2, level: number, spec: SlotSpec, go: Go): void {
+function goFinish(lap: Lap, middle: Point2, from: Point2, level: number, spec: SlotSpec, go: Go): void {
   const lead = LEAD_BITS * spec.bitDiameter;
   const [best] = lap.sides.map((side, index) => {
-    // From an end of the slot the way over leads through the open middle, not along the end wall.
+    // The way over leads through the open middle, along no wall; from an end of the slot it lands clear of the corner.
     const near = distanceAlong(side, from);
     const foot = near > 2 * spec.finishAllowance ? near : Math.min(spec.bitDiameter, side.length / 2);
     const room = side.from.y === side.to.y ? Math.min(lead, side.length - foot) : 0;
@@ -75,6 +75,7 @@ function goFinish(lap: Lap, from: Point2, level: number, spec: SlotSpec, go: Go)
   assert(best, 'a finish lap has sides');
   const off = inwardOf(best.side, best.foot, spec.finishAllowance);
   const on = pointAlong(best.side, best.foot + best.room);
+  if (Math.hypot(off.x - from.x, off.y - from.y) > spec.bitDiameter / 100) go({ x: off.x, y: middle.y }, level, 'pass');
   go(off, level, 'pass');
   goRound(lap, best.index, on, level, 'finish', go);
   go(off, level, 'finish');

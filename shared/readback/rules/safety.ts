@@ -86,7 +86,7 @@ export const nut: Rule = (cut) => {
   const height = (lowest?.to.z ?? 0) + spec.stickout;
   const { gap, motion } = gapToClamps(cut, spec.colletDiameter / 2, spec.stickout);
   const touches = height < -tolerance || gap <= 0;
-  const at = (touches ? motion : null) ?? lowest;
+  const at = gap <= 0 ? motion : lowest;
   return finding('nut', touches ? 'disagrees' : 'agrees', 'length', at?.at ?? cut.whole, {
     wanted: spec.clampHeight, measured: height, point: at?.to ?? null, reason: height < spec.clampHeight - tolerance ? 'beside' : null,
   });

@@ -35,8 +35,13 @@ describe.each([['in', 'mm', ROUND_A, 0.0005], ['mm', 'in', ROUND_MM, 0.01]] as c
     expect(Math.abs((here ?? NaN) - (there ?? NaN))).toBeLessThanOrEqual(0.1 * (other === 'in' ? 25.4 : 1) + 0.01 * (here ?? NaN));
   });
 
-  it('takes as many passes: the depth is an even number of stepdowns', () => {
-    const passes = (programUnits: 'in' | 'mm' | null) => makeProgram(asked({ ...raw, options: { programUnits } })).summary.passes.length;
-    expect([passes(null), passes(other)]).toEqual([2, 2]);
+  it('takes no pass deeper than the stepdown by more than half its own last decimal, and so perhaps one pass more', () => {
+    // Issue, "The plan". 5 mm is 1968.5 steps of 0.0001 in: two passes of 2.5 mm (984.25 steps) reach 1968 of the 1969.
+    const depths = (programUnits: 'in' | 'mm' | null) => makeProgram(asked({ ...raw, options: { programUnits } })).summary.passes;
+    const step = other === 'in' ? 1e-4 * 25.4 : 1e-3 / 25.4;
+    const written = depths(other);
+    expect(depths(null)).toHaveLength(2);
+    written.forEach((depth, i) => expect(depth - (written[i - 1] ?? 0)).toBeLessThanOrEqual(raw.stepdown + step / 2 + 1e-9));
+    expect(Math.abs((written.at(-1) ?? 0) - raw.depth)).toBeLessThanOrEqual(step / 2 + 1e-9);
   });
 });
