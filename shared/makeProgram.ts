@@ -1,5 +1,6 @@
 import { assert } from './assert';
 import { convertLength } from './measure/units';
+import { writeBody } from './program/body';
 import { GRID } from './program/grid';
 import { markIn, programMark, sha256Hex } from './program/mark';
 import { programFileName, writeProgram } from './program/write';
@@ -74,10 +75,11 @@ export function makeProgram(request: SlotRequest): MadeProgram {
   const units = options.programUnits ?? spec.units;
   const path = planSlot(spec, convertLength(GRID[units], units, spec.units));
 
-  const draft = read(writeProgram(request, path, null), request);
+  const body = writeBody(spec, options, path);
+  const draft = read(writeProgram(request, path, body, null), request);
   const measured = measure(draft, request);
   const facts = { seconds: timed(draft, spec).seconds, cautions: measured.findings.flatMap((finding) => sentenceOf(finding, spec.units).header ?? []) };
-  const program = writeProgram(request, path, facts);
+  const program = writeProgram(request, path, body, facts);
   const final = read(program, request);
   const lines = draft.ok && final.ok ? linesBetween(draft.program.steps, final.program.steps) : null;
   const readback = lines === null ? measure(final, request) : movedDown(measured, lines);

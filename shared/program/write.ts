@@ -4,7 +4,6 @@ import type { SlotPath } from '../slot/path';
 import type { SlotRequest } from '../slot/request';
 import { type SlotSpec, railLength } from '../slot/spec';
 import { WOOD_FACTS } from '../wood/woods';
-import { writeBody } from './body';
 import { BLANK_MARK, markComment, programMark } from './mark';
 import { commentLines, commentText } from './words';
 
@@ -20,19 +19,23 @@ export interface HeaderFacts {
 const HIGHEST_NUMBER = 9999;
 
 /**
- * The program's text: %, header, modes, cut, end, %; every option as asked.
+ * The program's text: %, header, blocks, %; every option as asked.
  *
  * RS-274 in the NISTIR 6556 dialect, held to what any three-axis controller reads alike. The header is for whoever
- * stands at the machine; without its facts the text is a draft: the blocks alone, to be read for what the header says.
+ * stands at the machine.
+ *
+ * @param body the blocks, from `writeBody`.
+ * @param facts null for a draft: the blocks alone, to be read for what the header says.
  */
-export function writeProgram(request: SlotRequest, path: SlotPath, facts: HeaderFacts | null): string {
+export function writeProgram(request: SlotRequest, path: SlotPath, body: readonly string[], facts: HeaderFacts | null): string {
   const { spec, options } = request;
   const units = options.programUnits ?? spec.units;
   const header = options.comments && facts ? headerLines(spec, units, path, facts) : [];
-  const lines = [...header, ...writeBody(spec, options, path)];
+  const lines = [...header, ...body];
   const numbered = options.lineNumbers ? numberLines(lines) : lines;
   const all = options.percent ? ['%', ...numbered, '%'] : numbered;
-  const text = all.map((line) => line + (options.lineEndings === 'crlf' ? '\r\n' : '\n')).join('');
+  const ending = options.lineEndings === 'crlf' ? '\r\n' : '\n';
+  const text = all.join(ending) + ending;
   return facts ? text.replace(markComment(BLANK_MARK), () => markComment(programMark(text))) : text;
 }
 
