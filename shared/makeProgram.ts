@@ -78,7 +78,8 @@ export function makeProgram(request: SlotRequest): MadeProgram {
   const body = writeBody(spec, options, path);
   const draft = read(writeProgram(request, path, body, null), request);
   const measured = measure(draft, request);
-  const facts = { seconds: timed(draft, spec).seconds, cautions: measured.findings.flatMap((finding) => sentenceOf(finding, spec.units).header ?? []) };
+  const cautions = measured.findings.filter(({ severity }) => severity === 'caution').flatMap((finding) => sentenceOf(finding, spec.units).header ?? []);
+  const facts = { seconds: timed(draft, spec).seconds, cautions };
   const program = writeProgram(request, path, body, facts);
   const final = read(program, request);
   const lines = draft.ok && final.ok ? linesBetween(draft.program.steps, final.program.steps) : null;

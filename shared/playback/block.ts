@@ -19,6 +19,8 @@ export interface StageSizes {
   readonly stickout: number;
   readonly colletDiameter: number;
   readonly safeHeight: number;
+  /** What earlier laps leave on the walls for the finish lap. */
+  readonly finishAllowance: number;
   /** Where clamps may stand: nothing comes there below `z1`. */
   readonly keepOut: readonly Box[];
 }
@@ -39,6 +41,7 @@ export function stageSizes(spec: SlotSpec, units: Units = spec.units): StageSize
     stickout: Math.max(size(spec.stickout), size(spec.cuttingLength)),
     colletDiameter: size(spec.colletDiameter),
     safeHeight: size(spec.safeHeight),
+    finishAllowance: size(spec.finishAllowance),
     keepOut: keepOut(rail, size(spec.clampReach), size(spec.clampHeight)),
   };
 }

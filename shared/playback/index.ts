@@ -5,4 +5,5 @@ export { type Segments, pathSegments } from './segments'; // timeline → straig
 export { type Removal, buildRemoval, removalInSlices } from './removal'; // pieces → when the wood goes, and how deep
 export { type Falls, depthAt, packFalls } from './layers'; // that, at one moment; and as a texture
 export { type PlanRun, drawnAt, planRuns } from './plan'; // pieces → the cut from above, and how much of it is behind
+export { finishSteps } from './finish'; // timeline → which steps run along the walls at a depth already cut
 export { type Pass, findPasses, passAt } from './passes'; // timeline → passes

@@ -3,6 +3,7 @@ import type { Segments } from './segments';
 /** One unbroken cut seen from above, as an SVG path in program coordinates (Y up). */
 export interface PlanRun {
   readonly d: string;
+  readonly finish: boolean;
   /** Length of the line as drawn: what goes straight down has none. */
   readonly drawn: number;
   /** For each of its points, the program's travel and the drawn length there. */
@@ -10,14 +11,14 @@ export interface PlanRun {
   readonly at: Float64Array;
 }
 
-/** The cuts, each run of motions without a rapid between as one line, and the rapids as one path. */
-export function planRuns({ count, ends, travel, rapid }: Segments): { readonly cuts: readonly PlanRun[]; readonly rapids: string } {
+/** The cuts, each run of motions without a rapid between as one line (a finish lap as its own), and the rapids as one path. */
+export function planRuns({ count, ends, travel, rapid, finish }: Segments): { readonly cuts: readonly PlanRun[]; readonly rapids: string } {
   const cuts: PlanRun[] = [];
   let rapids = '';
   for (let i = 0; i < count; ) {
     let end = i + 1;
-    while (end < count && rapid[end] === rapid[i]) end++;
-    const run = planRun(ends.subarray(i * 6, end * 6), travel.subarray(i * 2, end * 2));
+    while (end < count && rapid[end] === rapid[i] && finish?.[end] === finish?.[i]) end++;
+    const run = { ...planRun(ends.subarray(i * 6, end * 6), travel.subarray(i * 2, end * 2)), finish: finish?.[i] === 1 };
     if (rapid[i] === 1) rapids += run.d;
     else cuts.push(run);
     i = end;
@@ -27,7 +28,7 @@ export function planRuns({ count, ends, travel, rapid }: Segments): { readonly c
 
 const place = (x: number, y: number): string => `${+x.toFixed(4)} ${+y.toFixed(4)}`;
 
-function planRun(ends: Float64Array, travels: Float64Array): PlanRun {
+function planRun(ends: Float64Array, travels: Float64Array): Omit<PlanRun, 'finish'> {
   const count = ends.length / 6;
   const travel = new Float64Array(count + 1);
   const at = new Float64Array(count + 1);

@@ -13,15 +13,21 @@ export interface Segments {
   readonly travel: Float64Array;
   /** 1 for a rapid, 0 for a cut. */
   readonly rapid: Uint8Array;
+  /** 1 for a piece of a finish lap, where that was asked. */
+  readonly finish?: Uint8Array;
 }
 
-/** @param tolerance how far a chord may run inside its arc. */
-export function pathSegments(timeline: Timeline, tolerance: number): Segments {
+/**
+ * @param tolerance how far a chord may run inside its arc.
+ * @param finishing which steps are a finish lap (`finishSteps`).
+ */
+export function pathSegments(timeline: Timeline, tolerance: number, finishing?: Uint8Array): Segments {
   const pieces = timeline.steps.map((step, i) => (isMotion(step) && (timeline.length[i] ?? 0) > 0 ? chords(step, tolerance) : 0));
   const count = pieces.reduce((sum, n) => sum + n, 0);
   const ends = new Float64Array(count * 6);
   const travel = new Float64Array(count * 2);
   const rapid = new Uint8Array(count);
+  const finish = new Uint8Array(count);
   const point = newMoment();
   let at = 0;
   timeline.steps.forEach((step, i) => {
@@ -38,9 +44,10 @@ export function pathSegments(timeline: Timeline, tolerance: number): Segments {
         travel[at * 2 + end] = before + (length * (k + end)) / n;
       }
       rapid[at] = step.kind === 'rapid' ? 1 : 0;
+      finish[at] = finishing?.[i] ?? 0;
     }
   });
-  return { count, ends, travel, rapid };
+  return { count, ends, travel, rapid, finish };
 }
 
 /** An axis the program never states does not move; the drawing has it at zero. */

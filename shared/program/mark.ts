@@ -23,11 +23,12 @@ export function markIn(text: string): string | null {
 
 /** A text without what may change on its way to a machine: N words, % lines, blanks outside comments, line endings. */
 function bareText(text: string): string {
-  return text
-    .split(/\r\n?|\n/)
-    .map((line) => line.replace(/\([^)]*\)|[ \t]+/g, (part) => (part.startsWith('(') ? part : '')).replace(/^N\d+/i, ''))
-    .filter((line) => line !== '' && line !== '%')
-    .join('\n');
+  return text.split(/\r\n?|\n/).map(bareLine).filter((line) => line !== '' && line !== '%').join('\n');
+}
+
+function bareLine(line: string): string {
+  if (line.startsWith('(') && line.indexOf(')') === line.length - 1) return line; // most of a header: one comment, nothing else
+  return line.replace(/\([^)]*\)|[ \t]+/g, (part) => (part.startsWith('(') ? part : '')).replace(/^N\d+/i, '');
 }
 
 /** The text that a mark stands for: bare, and with the mark blanked. Comments count. */

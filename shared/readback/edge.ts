@@ -4,7 +4,7 @@ import type { Piece } from './cut';
 /** A part of the line that the bit's centre must follow so that the cutter makes a wall: straight, or round a centre. */
 export type EdgePart = (t: number) => Point2;
 
-/** The edge of a rounded rectangle in eight parts, each over t = 0 … 1; a corner radius of 0 leaves its four corners. */
+/** The edge of a rounded rectangle in its four sides and four corners, each over t = 0 … 1; without a radius the sides meet. */
 export function edgeParts(middle: Point2, halfLength: number, halfWidth: number, corner: number): EdgePart[] {
   const [a, b] = [halfLength - corner, halfWidth - corner];
   const straight = (x0: number, y0: number, x1: number, y1: number): EdgePart => (t) =>
@@ -13,10 +13,12 @@ export function edgeParts(middle: Point2, halfLength: number, halfWidth: number,
     const angle = start + (t * Math.PI) / 2;
     return { x: middle.x + x + corner * Math.cos(angle), y: middle.y + y + corner * Math.sin(angle) };
   };
-  return [
-    straight(-a, -halfWidth, a, -halfWidth), round(a, -b, -Math.PI / 2), straight(halfLength, -b, halfLength, b), round(a, b, 0),
-    straight(a, halfWidth, -a, halfWidth), round(-a, b, Math.PI / 2), straight(-halfLength, b, -halfLength, -b), round(-a, -b, Math.PI),
+  const sides = [
+    straight(-a, -halfWidth, a, -halfWidth), straight(halfLength, -b, halfLength, b),
+    straight(a, halfWidth, -a, halfWidth), straight(-halfLength, b, -halfLength, -b),
   ];
+  if (corner <= 0) return sides;
+  return [...sides, round(a, -b, -Math.PI / 2), round(a, b, 0), round(-a, b, Math.PI / 2), round(-a, -b, Math.PI)];
 }
 
 /**

@@ -1,7 +1,7 @@
 import type { ReadError, ReadProgram } from '../reader/motion';
 import type { SlotSpec } from '../slot/spec';
 import { layOnRail } from './cut';
-import { type Finding, type Readback, RULES } from './finding';
+import { type Finding, RULES, type Readback, type RuleName } from './finding';
 import { depthsOfCut, entry, laps, retracts } from './rules/cutting';
 import { chipLoad, feed, plungeFeed, spindle, spindleSpeed, travel } from './rules/machine';
 import type { Rule } from './rules/rule';
@@ -37,8 +37,10 @@ export function unreadable(error: ReadError): Readback {
   ]);
 }
 
+const ORDER = Object.fromEntries(RULES.map((rule, i) => [rule, i])) as Readonly<Record<RuleName, number>>;
+
 function verdictOf(findings: readonly Finding[]): Readback {
-  const sorted = [...findings].sort((a, b) => RULES.indexOf(a.rule) - RULES.indexOf(b.rule));
+  const sorted = [...findings].sort((a, b) => ORDER[a.rule] - ORDER[b.rule]);
   const has = (severity: Finding['severity']) => sorted.some((finding) => finding.severity === severity);
   return { verdict: has('disagrees') ? 'disagrees' : has('caution') ? 'caution' : 'agrees', findings: sorted };
 }

@@ -126,6 +126,9 @@ function fill(value: Shape, unreadable: ReadonlySet<PropertyKey>): SlotSpec {
 /** Nothing unreadable. */
 const NONE: ReadonlySet<PropertyKey> = new Set();
 
+/** The spec that the rules saw of a request is the one it becomes: filled once. */
+const filled = new WeakMap<object, SlotSpec>();
+
 function conversions(value: Shape): string[] {
   return LENGTH_FIELDS.flatMap((field) => {
     const written = value[field];
@@ -151,7 +154,9 @@ export const slotRequestSchema = z
     (value, context) => {
       if (context.issues.some((issue) => issue.code === 'invalid_type' && !issue.path?.length)) return;
       const unreadable = new Set(context.issues.map((issue) => issue.path?.[0] ?? ''));
-      for (const { field, message } of findProblems(fill(value, unreadable), value.options?.chordTolerance)) {
+      const spec = fill(value, unreadable);
+      filled.set(value, spec);
+      for (const { field, message } of findProblems(spec, value.options?.chordTolerance)) {
         context.addIssue({ code: 'custom', path: [field], message });
       }
       const most = byUnits(value.units, 0.0005, 0.01); // the finished slot is the asked one to within this
@@ -163,7 +168,7 @@ export const slotRequestSchema = z
     { when: () => true },
   )
   .transform((value): SlotRequest => ({
-    spec: fill(value, NONE),
+    spec: filled.get(value) ?? fill(value, NONE),
     options: value.options ?? DEFAULT_OPTIONS,
     assumed: fieldNames.filter((field) => value[field] === undefined),
     notes: conversions(value),
