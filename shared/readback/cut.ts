@@ -1,7 +1,7 @@
 import type { Point3 } from '../geometry/point';
 import { type Units, byUnits, convertLength } from '../measure/units';
 import { mapPlaces, stepsIn } from '../reader/inUnits';
-import type { Motion, Place, ReadProgram, Step } from '../reader/motion';
+import { type Motion, type Place, type ReadProgram, type Step, isMotion } from '../reader/motion';
 import { type SlotSpec, railLength } from '../slot/spec';
 
 /** Sizes agree within this: a tenth of what a shop can measure on wood (common practice, no source). */
@@ -56,10 +56,6 @@ export function layOnRail(program: ReadProgram, spec: SlotSpec): Cut {
     pieces: motions.flatMap((motion) => piecesBelow(motion, tolerance * CHORD_SHARE)),
     whole: { line: 1, column: 1 },
   };
-}
-
-export function isMotion(step: Step): step is Motion {
-  return step.kind === 'rapid' || step.kind === 'line' || step.kind === 'arc';
 }
 
 /** The straight pieces of a motion that lie below the rail's top; none while the machine's place is not known. */

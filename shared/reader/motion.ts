@@ -104,6 +104,11 @@ export type Event =
 
 export type Step = Motion | Event;
 
+/** Whether a step moves the controlled point. */
+export function isMotion(step: Step): step is Motion {
+  return step.kind === 'rapid' || step.kind === 'line' || step.kind === 'arc';
+}
+
 /** A program as read: the words, and what the machine will do. */
 export interface ReadProgram {
   /** Made when first asked for; the words of every line, also of those after the end. */

@@ -1,6 +1,7 @@
 import { type MutablePoint, copyPoint, pointAlong } from './along';
 import { travelled } from './profile';
-import { type Timeline, isMotion } from './timeline';
+import { isMotion } from '../reader/motion';
+import type { Timeline } from './timeline';
 
 /** Where the program stands at a moment. Coordinates are NaN where the program has not stated them yet. */
 export interface Moment extends MutablePoint {

@@ -1,4 +1,4 @@
-import type { Motion, Step } from '../reader/motion';
+import { type Motion, type Step, isMotion } from '../reader/motion';
 import { type MutablePoint, directionAt, motionLength, roundShare, startsUnknown } from './along';
 import type { Dynamics } from './dynamics';
 import { moveSeconds, peakSpeed } from './profile';
@@ -105,10 +105,6 @@ export function timeOf(steps: readonly Step[], dynamics: Dynamics): Timeline {
   return { steps, acceleration, seconds, start, end, length, before, entry, peak, exit, motion, first, cutLength, rapidLength, stops, unmeasured };
 }
 
-/** True for what moves. */
-export function isMotion(step: Step): step is Motion {
-  return step.kind === 'rapid' || step.kind === 'line' || step.kind === 'arc';
-}
 
 /** Units per second the motion may reach; 0 where it has no feed. */
 function topSpeed(move: Motion, length: number, { acceleration, rapidFeed, topFeed }: Dynamics): number {
