@@ -13,12 +13,11 @@ export function edgeParts(middle: Point2, halfLength: number, halfWidth: number,
     const angle = start + (t * Math.PI) / 2;
     return { x: middle.x + x + corner * Math.cos(angle), y: middle.y + y + corner * Math.sin(angle) };
   };
-  const sides = [
-    straight(-a, -halfWidth, a, -halfWidth), straight(halfLength, -b, halfLength, b),
-    straight(a, halfWidth, -a, halfWidth), straight(-halfLength, b, -halfLength, -b),
+  const parts: readonly (readonly [EdgePart, EdgePart])[] = [
+    [straight(-a, -halfWidth, a, -halfWidth), round(a, -b, -Math.PI / 2)], [straight(halfLength, -b, halfLength, b), round(a, b, 0)],
+    [straight(a, halfWidth, -a, halfWidth), round(-a, b, Math.PI / 2)], [straight(-halfLength, b, -halfLength, -b), round(-a, -b, Math.PI)],
   ];
-  if (corner <= 0) return sides;
-  return [...sides, round(a, -b, -Math.PI / 2), round(a, b, 0), round(-a, b, Math.PI / 2), round(-a, -b, Math.PI)];
+  return parts.flatMap(([side, bend]) => (corner > 0 ? [side, bend] : [side]));
 }
 
 /**
