@@ -48,7 +48,12 @@ export default defineNuxtConfig({
     '/api/**': { headers: { 'cache-control': 'no-store' } },
   },
 
+  // Nuxt's own data fetching is made at load by calls that look as if they did something: without use, without weight.
+  vite: { build: { rollupOptions: { treeshake: { moduleSideEffects: (id) => !/nuxt\/dist\/app\/composables\/(asyncData|fetch|component|preview)\.js/.test(id) } } } },
+
   nitro: {
+    // Scripts and styles lie compressed beside the plain ones; pages are compressed by server/plugins/compress.ts.
+    compressPublicAssets: { gzip: true, brotli: true },
     typescript: { tsConfig: { compilerOptions: exact } },
     // Part of the built server, which runs from any folder.
     virtual: {
@@ -57,6 +62,18 @@ export default defineNuxtConfig({
   },
 
   hooks: {
+    // The setup sheet stands in the page; its code is fetched by the first touch (useTouched), so nothing preloads it.
+    'build:manifest'(manifest) {
+      const part = (path: string) => Object.values(manifest).find(({ src }) => src?.endsWith(path));
+      const needed = new Set(part('pages/index.vue')?.imports);
+      const sheet = part('Program/ProgramSetupSheet.vue');
+      if (!sheet) return;
+      sheet.preload = false;
+      for (const id of sheet.imports ?? []) {
+        const chunk = manifest[id];
+        if (chunk && !chunk.isEntry && !needed.has(id)) chunk.preload = false;
+      }
+    },
     // Ours answers for /api; Nuxt's own then answers for pages.
     'nitro:config'(config) {
       config.errorHandler = [here('./server/error.ts'), ...[config.errorHandler ?? []].flat()];

@@ -26,6 +26,7 @@ export function useRelease() {
     const wrong = Object.keys(slot.problems).length;
     if (wrong > 0) return `${countWord(wrong)} ${wrong === 1 ? 'size needs' : 'sizes need'} a change.`;
     if (slot.current) return null;
+    if (slot.stopped) return 'The code that reads back could not be fetched. Reload the page when there is a connection: the address keeps the drawing.';
     if (!slot.settled || !slot.made) return 'Reading the program back.';
     const differ = differing(slot.made.readback).length;
     return `${countWord(differ)} ${differ === 1 ? 'reading differs' : 'readings differ'} from the drawing.`;

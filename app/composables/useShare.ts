@@ -1,5 +1,3 @@
-import { useDebounceFn } from '@vueuse/core';
-
 /**
  * The page's address holds the drawing. It follows what is typed once the typing rests, and opening one draws it; an
  * address that cannot be read says so and leaves the first drawing.
@@ -19,9 +17,11 @@ export function useShare() {
     damaged.value = draft === null;
     if (draft && hash !== linkOf(slot.draft)) slot.load(draft);
   }
-  const write = useDebounceFn(() => {
-    window.history.replaceState(window.history.state, '', linkOf(slot.draft));
-  }, REST_MS);
+  let timer: ReturnType<typeof setTimeout> | undefined;
+  function write(): void {
+    clearTimeout(timer);
+    timer = setTimeout(() => window.history.replaceState(window.history.state, '', linkOf(slot.draft)), REST_MS);
+  }
 
   onMounted(() => {
     open();
@@ -29,10 +29,13 @@ export function useShare() {
     watch(() => slot.draft, () => {
       damaged.value = false;
       copied.value = false;
-      void write();
+      write();
     });
   });
-  onUnmounted(() => window.removeEventListener('hashchange', open));
+  onUnmounted(() => {
+    clearTimeout(timer);
+    window.removeEventListener('hashchange', open);
+  });
 
   async function share(): Promise<void> {
     const url = new URL(window.location.href);

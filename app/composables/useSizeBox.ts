@@ -23,6 +23,7 @@ export function useSizeBox(field: () => SizeKey | RateKey | CountKey) {
   const size = computed(() => {
     const key = field();
     if (!isSize(key)) return null;
+    if (isCoin(key)) return slot.sizes[key] ?? (empty.value ? coinDefault(slot.units, key) : null);
     const fallback = key === 'railLength' ? null : slot.request?.spec[key] ?? null;
     return slot.sizes[key] ?? (empty.value ? fallback : null);
   });
@@ -53,7 +54,7 @@ export function useSizeBox(field: () => SizeKey | RateKey | CountKey) {
     if (!empty.value) return 'entered';
     return optional.value ? 'derived' : 'needed';
   });
-  const problem = computed(() => slot.problems[field()]?.[0] ?? null);
+  const problem = computed(() => slot.problems[field()]?.[0] ?? slot.coinProblems[field()]?.[0] ?? null);
   const spoken = computed(() => {
     const now = face.value;
     if (!now) return '';

@@ -33,10 +33,10 @@ export interface LineLook {
  * Cuts long pieces up. A line that runs the length of the rail is a sliver thousands of times longer than wide, and in a
  * near view the card's depth along such a one is off by more than the line lies over the wood.
  */
-function cutUp({ count, ends, travel, rapid }: Segments, longest: number): Segments {
+function cutUp({ count, ends, travel, rapid, finish }: Segments, longest: number): Segments {
   const parts = Array.from({ length: count }, (_, i) => Math.max(1, Math.ceil(Math.hypot(...[0, 1, 2].map((k) => (ends[i * 6 + 3 + k] ?? 0) - (ends[i * 6 + k] ?? 0))) / longest)));
   const total = parts.reduce((sum, n) => sum + n, 0);
-  const cut = { count: total, ends: new Float64Array(total * 6), travel: new Float64Array(total * 2), rapid: new Uint8Array(total) };
+  const cut = { count: total, ends: new Float64Array(total * 6), travel: new Float64Array(total * 2), rapid: new Uint8Array(total), finish: new Uint8Array(total) };
   const between = (of: Float64Array, from: number, step: number, share: number) => (of[from] ?? 0) + ((of[from + step] ?? 0) - (of[from] ?? 0)) * share;
   let at = 0;
   parts.forEach((n, i) => {
@@ -47,6 +47,7 @@ function cutUp({ count, ends, travel, rapid }: Segments, longest: number): Segme
         cut.travel[at * 2 + end] = between(travel, i * 2, 1, share);
       }
       cut.rapid[at] = rapid[i] ?? 0;
+      cut.finish[at] = finish?.[i] ?? 0;
     }
   });
   return cut;
@@ -57,7 +58,7 @@ export const pieceOf = ({ x0, x1 }: Box): number => (x1 - x0) / 32;
 
 /** One quad for each piece of line; every look at it shares them. */
 export function lineGeometry(segments: Segments, longest: number): InstancedBufferGeometry {
-  const { count, ends, travel, rapid } = cutUp(segments, longest);
+  const { count, ends, travel, rapid, finish } = cutUp(segments, longest);
   const geometry = new InstancedBufferGeometry();
   geometry.setAttribute('position', new Float32BufferAttribute([0, -0.5, 0, 1, -0.5, 0, 1, 0.5, 0, 0, 0.5, 0], 3));
   geometry.setIndex([0, 1, 2, 0, 2, 3]);
@@ -69,7 +70,8 @@ export function lineGeometry(segments: Segments, longest: number): InstancedBuff
   geometry.setAttribute('aFrom', pick(ends, 3, 0, 6));
   geometry.setAttribute('aTo', pick(ends, 3, 3, 6));
   geometry.setAttribute('aTravel', pick(travel, 2, 0, 2));
-  geometry.setAttribute('aRapid', new InstancedBufferAttribute(Float32Array.from(rapid), 1));
+  // 1 for a rapid, -1 for a finish lap, 0 for any other cut.
+  geometry.setAttribute('aRapid', new InstancedBufferAttribute(Float32Array.from(rapid, (one, i) => one - (finish?.[i] ?? 0)), 1));
   geometry.instanceCount = count;
   return geometry;
 }

@@ -74,7 +74,7 @@ export const WOOD_FRAGMENT = /* glsl */ `
   }
 `;
 
-/** Lines of a set width on the screen; what is behind the travel is solid, what is ahead dashed, rapids dotted. */
+/** Lines of a set width on the screen; what is behind the travel is solid, what is ahead dashed, rapids dotted, a finish lap double. */
 export const LINE_VERTEX = /* glsl */ `
   precision highp int;
   #ifdef PROFILE
@@ -90,7 +90,7 @@ export const LINE_VERTEX = /* glsl */ `
   attribute float aRapid;
   uniform vec2 uSize;
   uniform float uWidth, uPixels, uLift;
-  varying float vTravel, vRapid, vAcross;
+  varying float vTravel, vRapid, vAcross, vSide;
   void main() {
     #ifdef PROFILE
       vec3 fromPlace = onWood(aFrom, aCrossings.x), toPlace = onWood(aTo, aCrossings.y);
@@ -112,7 +112,8 @@ export const LINE_VERTEX = /* glsl */ `
     vec2 way = to - from;
     way = length(way) > 1e-4 ? normalize(way) : vec2(1.0, 0.0);
     vec4 end = position.x < 0.5 ? a : b;
-    vec2 shift = (way * (position.x < 0.5 ? -0.5 : 0.5) + vec2(-way.y, way.x) * position.y) * uWidth * uPixels;
+    vec2 shift = (way * (position.x < 0.5 ? -0.5 : 0.5) + vec2(-way.y, way.x) * position.y) * uWidth * uPixels * (aRapid < -0.5 ? 2.0 : 1.0);
+    vSide = position.y;
     vTravel = mix(aTravel.x, aTravel.y, position.x < 0.5 ? kept.x : kept.y);
     vRapid = aRapid;
     vAcross = mix(aFrom.y, aTo.y, position.x < 0.5 ? kept.x : kept.y);
@@ -123,12 +124,13 @@ export const LINE_VERTEX = /* glsl */ `
 `;
 
 export const LINE_FRAGMENT = /* glsl */ `
-  varying float vTravel, vRapid, vAcross;
+  varying float vTravel, vRapid, vAcross, vSide;
   uniform vec3 uColour, uRapidColour;
   uniform float uTravel, uOpacity, uPixels, uMiddle;
   uniform bool uSection;
   void main() {
     if (uSection && vAcross < uMiddle) discard;
+    if (vRapid < -0.5 && abs(vSide) < 0.17) discard; // two lines with a gap
     #ifdef PROFILE
       bool ahead = false;
     #else

@@ -1,20 +1,20 @@
 import { defineStore } from 'pinia';
-import { useDebounceFn } from '@vueuse/core';
 import { computed, ref, shallowRef, watch } from 'vue';
-import { type MadeProgram, makeProgram } from '#shared/makeProgram';
-import { type SlotRequest, slotRequestSchema } from '#shared/slot/request';
+import { startCore } from '~/core';
+import type { Answer, Reading } from '~/core/answer';
 import { type Draft, type Figures, type PickKey, type TextKey, FIRST_DRAFT, follower, unitsOf, withPick, withText } from '~/utils/draft';
+import { coinOf, coinProblems } from '~/utils/coin';
 import { drawnRail } from '~/utils/drawn';
-import { problemsOf } from '~/utils/problems';
+import { type Issue, problemsOf } from '~/utils/problems';
 import { rawRequestOf } from '~/utils/rawRequest';
 import { sizesOf } from '~/utils/sizes';
 
 /** Enough steps to take a whole afternoon back; a draft is a few hundred bytes. */
 const MOST_STEPS = 300;
-/** Longer than the gap between two keystrokes of a fast typist, shorter than anyone notices. */
-const SETTLE_MS = 40;
+/** What takes longer is said in words; what does not would only flicker. */
+const NOTICED_MS = 150;
 
-/** One rail being drawn: what was typed, its history, and the program the browser makes of it while typing. */
+/** One rail being drawn: what was typed, its history, and the program that the core makes of it while typing. */
 export const useSlotStore = defineStore('slot', () => {
   const draft = shallowRef<Draft>(FIRST_DRAFT);
   const past = shallowRef<readonly Draft[]>([]);
@@ -55,45 +55,62 @@ export const useSlotStore = defineStore('slot', () => {
   const sizes = computed(() => sizesOf(draft.value));
   const follows = computed(() => follower(draft.value));
   const raw = computed(() => rawRequestOf(draft.value));
-  const parsed = computed(() => slotRequestSchema.safeParse(raw.value));
-  const problems = computed(() => problemsOf(draft.value, parsed.value.success ? [] : parsed.value.error.issues));
-  const sound = computed(() => parsed.value.success && Object.keys(problems.value).length === 0);
+  /** Of the last request that was judged. */
+  const issues = shallowRef<readonly Issue[]>([]);
+  const problems = computed(() => problemsOf(draft.value, issues.value));
+  const coin = computed(() => coinOf(draft.value));
+  const coinFaults = computed(() => coinProblems(draft.value));
+  const sound = computed(() => issues.value.length === 0 && Object.keys(problems.value).length === 0);
 
   // The last good ones stay on the sheet while a size is being typed.
   const drawn = shallowRef(drawnRail(FIRST_DRAFT));
   const redrawn = computed(() => drawnRail(draft.value));
   watch(redrawn, (rail) => { if (rail) drawn.value = rail; }, { flush: 'sync' });
 
-  const made = shallowRef<MadeProgram | null>(null);
-  const request = shallowRef<SlotRequest | null>(null);
-  /** True while `made` belongs to the sizes on the sheet. */
-  const settled = ref(false);
-  function remake(): void {
-    if (parsed.value.success && sound.value) {
-      request.value = parsed.value.data;
-      made.value = makeProgram(parsed.value.data);
-      settled.value = true;
-    }
+  // The first drawing's program came with the page; those of others come from the core, which is fetched when asked.
+  const reading = shallowRef<Reading | null>(useNuxtApp().payload.firstReading ?? null);
+  const made = computed(() => reading.value?.made ?? null);
+  /** True once the core has said all there is to say about what is on the sheet. */
+  const settled = ref(reading.value !== null);
+  const late = ref(false);
+  const stopped = ref(false);
+  let lateTimer: ReturnType<typeof setTimeout> | undefined;
+
+  function hear(answer: Answer): void {
+    stopped.value = answer.kind === 'stopped';
+    if (answer.kind === 'judged') issues.value = answer.issues;
+    if (answer.kind === 'made') reading.value = answer;
+    if (answer.kind === 'judged' && answer.issues.length === 0) return; // its program follows
+    settled.value = answer.kind !== 'stopped';
+    late.value = false;
+    clearTimeout(lateTimer);
   }
-  const remakeSoon = useDebounceFn(remake, SETTLE_MS);
-  remake();
-  watch(draft, () => {
+  const core = import.meta.client ? startCore(hear) : null;
+  function ask(): void {
     settled.value = false;
-    void remakeSoon();
-  }, { flush: 'sync' });
+    core?.ask(raw.value);
+    clearTimeout(lateTimer);
+    if (core) lateTimer = setTimeout(() => { late.value = !settled.value; }, NOTICED_MS);
+  }
+  if (!settled.value) ask();
+  watch(draft, ask, { flush: 'sync' });
 
   return {
     // Computed, so that nothing of it is put into the page's payload: server and browser start from the same drawing.
     draft: computed(() => draft.value), type, pick, setFigures, load, seal, undo, redo,
     canUndo: computed(() => past.value.length > 0),
     canRedo: computed(() => future.value.length > 0),
-    units, sizes, follows, raw, problems, sound, settled: computed(() => settled.value),
+    units, sizes, follows, raw, problems, sound, coin, coinProblems: coinFaults, settled: computed(() => settled.value),
     drawn: computed(() => drawn.value),
     /** The drawing is older than what is typed. */
     superseded: computed(() => redrawn.value === null),
     /** Of the last sizes that worked. Only `current` may be taken away. */
-    request: computed(() => request.value),
-    made: computed(() => made.value),
+    request: computed(() => reading.value?.request ?? null),
+    made,
+    /** The core has been at work for long enough to say so, or could not be fetched. */
+    late: computed(() => late.value), stopped: computed(() => stopped.value),
     current: computed(() => (sound.value && settled.value && made.value?.ok ? made.value : null)),
+    /** The same, or the one before while its successor is being read back: to look at. */
+    standing: computed(() => (sound.value && made.value?.ok ? made.value : null)),
   };
 });

@@ -4,8 +4,13 @@ import type { Units } from '#shared/measure/units';
 export const SIZE_KEYS = [
   'railLength', 'length', 'stopMargin', 'width', 'depth', 'railWidth', 'railThickness', 'bitDiameter', 'stepdown',
   'finishAllowance', 'cuttingLength', 'colletDiameter', 'stickout', 'clampHeight', 'clampReach', 'safeHeight',
+  'coinDiameter', 'coinThickness',
 ] as const;
 export type SizeKey = (typeof SIZE_KEYS)[number];
+
+/** The coin that stands in the section: on the drawing and in the link, never in the program's request. */
+export const COIN_KEYS = ['coinDiameter', 'coinThickness'] as const satisfies readonly SizeKey[];
+export type CoinKey = (typeof COIN_KEYS)[number];
 
 /** Plain numbers that count lengths (per minute, per tooth, …): these follow a change of units. */
 export const RATE_KEYS = [
@@ -58,6 +63,7 @@ export interface Draft {
 export const unitsOf = (draft: Draft): Units => (draft.figures === 'mm' ? 'mm' : 'in');
 export const isTrio = (key: TextKey): key is TrioKey => TRIO.some((one) => one === key);
 export const isSize = (key: TextKey): key is SizeKey => SIZE_KEYS.some((one) => one === key);
+export const isCoin = (key: TextKey): key is CoinKey => COIN_KEYS.some((one) => one === key);
 export const isRate = (key: TextKey): key is RateKey => RATE_KEYS.some((one) => one === key);
 
 /** The one of the three that follows the other two. */
@@ -103,6 +109,7 @@ export const FIRST_DRAFT: Draft = draftOf(
   {
     'railLength': inches('26 1/4'), 'stopMargin': inches('7/8'), 'width': inches('3/8'), 'depth': inches('3/16'),
     'railWidth': inches('1 1/4'), 'railThickness': inches('3/4'), 'bitDiameter': inches('1/4'), 'stepdown': inches('3/32'),
+    'coinDiameter': inches('1 3/4'), 'coinThickness': inches('0.125'),
     'flutes': inches('2'), 'spindleSpeed': inches('16000'), 'feed': inches('100'), 'plungeFeed': inches('25'),
   },
   { wood: 'white-oak' },

@@ -22,7 +22,7 @@ const TEXT_CODES: Readonly<Record<TextKey, string>> = {
   'machine.acceleration': 'ma', 'machine.travel.x': 'mx', 'machine.travel.y': 'my', 'machine.travel.z': 'mz',
   'chipLoadRange.0': 'c0', 'chipLoadRange.1': 'c1', 'options.chordTolerance': 'ot', 'flutes': 'n', 'spindleSpeed': 'r',
   'rampAngle': 'a', 'stepover': 'st', 'machine.spindleRange.0': 'r0', 'machine.spindleRange.1': 'r1', 'name': 't',
-  'options.fileEnding': 'oe',
+  'options.fileEnding': 'oe', 'coinDiameter': 'kd', 'coinThickness': 'kt',
 };
 const PICK_CODES: Readonly<Record<PickKey, string>> = {
   'ends': 'E', 'wood': 'W', 'direction': 'D', 'bitKind': 'B', 'centreCutting': 'C', 'workZero': 'Z', 'spindle': 'S',

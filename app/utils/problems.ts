@@ -1,7 +1,7 @@
 import { LENGTH_HELP, parseLength } from '#shared/measure/length';
 import { FIELDS } from '#shared/slot/fields';
 import { capital } from './boxes';
-import { type Draft, type SizeKey, type TrioKey, SIZE_KEYS, follower } from './draft';
+import { type Draft, type SizeKey, type TrioKey, SIZE_KEYS, follower, isCoin } from './draft';
 
 /** What the schema's issues have in common with a problem+json answer. */
 export interface Issue {
@@ -12,7 +12,10 @@ export interface Issue {
 /** Sentences by the box they stand beside; the key is the field's dotted path. */
 export type Problems = Readonly<Record<string, readonly string[]>>;
 
-export const sizeWords = (key: SizeKey): string => (key === 'railLength' ? 'rail length' : FIELDS[key].words);
+export const sizeWords = (key: SizeKey): string => {
+  if (isCoin(key)) return key === 'coinDiameter' ? 'coin diameter' : 'coin thickness';
+  return key === 'railLength' ? 'rail length' : FIELDS[key].words;
+};
 
 
 /** Beside a box its text is in sight, so the sentence need not quote it. */
@@ -36,7 +39,7 @@ export function problemsOf(draft: Draft, issues: readonly Issue[]): Problems {
   };
   for (const key of SIZE_KEYS) {
     const message = boxMessage(draft, key);
-    if (message && key !== follower(draft)) add(key, message);
+    if (message && key !== follower(draft) && !isCoin(key)) add(key, message);
   }
   const holds = (key: TrioKey) => draft.held.includes(key);
   if (holds('railLength') && draft.texts.railLength.text.trim() === '') add('railLength', `Rail length is missing. ${LENGTH_HELP}`);

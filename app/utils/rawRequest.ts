@@ -1,4 +1,4 @@
-import { type Draft, type PickKey, type TextKey, type Typed, RATE_KEYS, COUNT_KEYS, SIZE_KEYS, TRIO, WORD_KEYS, follower, unitsOf } from './draft';
+import { type Draft, type PickKey, type TextKey, type Typed, RATE_KEYS, COUNT_KEYS, SIZE_KEYS, TRIO, WORD_KEYS, follower, isCoin, unitsOf } from './draft';
 import { editText, numberIn, sizesOf } from './sizes';
 
 /** JSON as it is posted and hashed; the schema judges it, so that nothing is judged twice. */
@@ -41,7 +41,7 @@ export function rawRequestOf(draft: Draft): { [key: string]: Raw } {
     }
   };
   const trio: ReadonlySet<string> = new Set(TRIO);
-  each(SIZE_KEYS.filter((key) => !trio.has(key)), (key, typed) => editText(typed, key, units).trim());
+  each(SIZE_KEYS.filter((key) => !trio.has(key) && !isCoin(key)), (key, typed) => editText(typed, key, units).trim());
   each([...RATE_KEYS, ...COUNT_KEYS], (key, typed) => {
     const value = numberIn(units, key, typed);
     return Number.isNaN(value) ? typed.text.trim() : value;

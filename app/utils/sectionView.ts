@@ -29,10 +29,10 @@ export interface SectionView {
 const MOST_HEIGHT = 104; // px: leaves room for the sizes above and below in the drawing's 330 px
 const RING_GAP = 9; // px between growth rings
 
-/** Lays the section out centred at `middle`, as large as `span` allows. */
-export function sectionView(sizes: SectionSizes, room: { readonly middle: number; readonly span: number; readonly top: number }): SectionView {
+/** Lays the section out centred at `middle`, as large as `span` and `most` pixels to the unit allow. */
+export function sectionView(sizes: SectionSizes, room: { readonly middle: number; readonly span: number; readonly top: number; readonly most?: number }): SectionView {
   const { railWidth, railThickness, width, depth } = sizes;
-  const scale = Math.min(room.span / railWidth, MOST_HEIGHT / railThickness);
+  const scale = Math.min(room.span / railWidth, MOST_HEIGHT / railThickness, room.most ?? Infinity);
   const half = (railWidth * scale) / 2;
   const [left, right, top] = [room.middle - half, room.middle + half, room.top];
   const bottom = top + railThickness * scale;
@@ -46,4 +46,21 @@ export function sectionView(sizes: SectionSizes, room: { readonly middle: number
     scale, left, right, top, bottom, grooveLeft, grooveRight, floor, rings, pith, passFloors: floors,
     outline: `M${left} ${top}H${grooveLeft}V${floor}H${grooveRight}V${top}H${right}V${bottom}H${left}Z`,
   };
+}
+
+/** Room for the coin above the rail and to the right of the groove's middle, in pixels. */
+export interface CoinRoom {
+  readonly above: number;
+  readonly beside: number;
+}
+
+/** The scale at which the coin has room. A coin many times the rail's size is cut off rather than shrinking the rail away. */
+export function scaleForCoin(sizes: SectionSizes, coin: { readonly high: number; readonly reach: number }, room: CoinRoom): number {
+  const least = (0.45 * MOST_HEIGHT) / sizes.railThickness;
+  return Math.max(least, Math.min(room.above / Math.max(coin.high, 1e-6), room.beside / Math.max(coin.reach, 1e-6)));
+}
+
+/** The coin's corners on the drawing, as an SVG polygon's points. */
+export function coinPoints(view: SectionView, corners: readonly (readonly [number, number])[]): string {
+  return corners.map(([x, y]) => `${(view.grooveLeft + x * view.scale).toFixed(1)},${(view.floor - y * view.scale).toFixed(1)}`).join(' ');
 }

@@ -27,6 +27,9 @@ const DIRECTIVES = [
 /** For everything that runs no inline script. */
 export const CONTENT_SECURITY_POLICY = [...DIRECTIVES, "script-src 'self'"].join('; ');
 
+/** For the development server, whose scripts are written into the page, reloaded and evaluated. */
+export const DEVELOPMENT_POLICY = [...DIRECTIVES, "script-src 'self' 'unsafe-inline' 'unsafe-eval'"].join('; ').replace("connect-src 'self'", "connect-src 'self' ws: wss:");
+
 /** For a page: its inline scripts carry the nonce made for this one answer. */
 export function pagePolicy(nonce: string): string {
   return [...DIRECTIVES, `script-src 'self' 'nonce-${nonce}'`].join('; ');

@@ -81,21 +81,4 @@ describe('for everyone, on every screen', () => {
     expect(await page.locator('html').getAttribute('data-theme')).toBe('night');
     await context.close();
   });
-
-  test('prints one setup sheet, on Letter and on A4, with mark, cautions and boxes', async () => {
-    const { page, context } = await openPage(browser, url);
-    await page.emulateMedia({ media: 'print' });
-    const sheet = page.locator('.setup');
-    await sheet.waitFor();
-    const words = (await sheet.textContent()) ?? '';
-    expect(words).toContain(await mark(page));
-    expect(words).toContain('All sizes in inches');
-    expect(words).toContain("The machine's manual, the bit maker's limits and your local rules come first.");
-    expect(await page.locator('.poster').isVisible()).toBe(false);
-    for (const format of ['Letter', 'A4']) {
-      const pdf = (await page.pdf({ format })).toString('latin1');
-      expect(pdf.match(/\/Type\s*\/Page\b/g)?.length, format).toBe(1);
-    }
-    await context.close();
-  });
 });
