@@ -44,12 +44,12 @@ describe('for everyone, on every screen', () => {
     const focused = () => page.evaluate(() => document.activeElement?.closest('[data-size]')?.getAttribute('data-size') ?? null);
     for (let i = 0; i < 30 && (await focused()) !== 'railLength'; i++) await page.keyboard.press('Tab');
     const order: (string | null)[] = [];
-    for (let i = 0; i < 13; i++) {
+    for (let i = 0; i < 15; i++) {
       order.push(await focused());
       await page.keyboard.press('Tab');
     }
     expect(order).toEqual([
-      'railLength', 'stopMargin', 'length', 'width', 'depth', 'railThickness', 'railWidth',
+      'railLength', 'stopMargin', 'length', 'coinDiameter', 'coinThickness', 'width', 'depth', 'railThickness', 'railWidth',
       'bitDiameter', 'flutes', 'spindleSpeed', 'feed', 'plungeFeed', 'stepdown',
     ]);
     await box(page, 'railLength').focus();

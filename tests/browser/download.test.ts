@@ -102,5 +102,5 @@ describe('taking a program away', () => {
     await page.locator('[data-download]').waitFor();
     expect(complaints).toEqual([]);
     await context.close();
-  });
+  }, 300_000); // a hundred inputs, each typed, refused and taken back by the page
 });

@@ -47,7 +47,8 @@ describe('prints', () => {
   }
 
   test.each(FORMATS)('the setup sheet is one page of %s, bars true, also with a long name, cautions and an assumed width', async (format) => {
-    for (const edits of [{}, { railWidth: '', railThickness: '', feed: '30', depth: '1/2' }]) {
+    const CASES: readonly Record<string, string>[] = [{}, { railWidth: '', railThickness: '', feed: '30', depth: '1/2' }];
+    for (const edits of CASES) {
       const { page, context } = await open(edits);
       if ('railWidth' in edits) await page.getByLabel('Name on the program and the sheet').fill(NAME);
       await settle(page);

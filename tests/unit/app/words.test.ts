@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import type { Finding, Readback, Severity } from '#shared/readback/finding';
 import { ROUTER_CAUTIONS, cautionsOf, clock, countWord, differing, plural, spokenClock, verdictOf } from '../../../app/utils/words';
 
-const finding = (severity: Severity): Finding => ({ rule: 'depth', severity, at: null, point: null, quantity: 'length', wanted: 1, measured: 1, reason: null });
+const finding = (severity: Severity): Finding => ({ rule: 'depth', severity, at: { line: 1, column: 1 }, point: null, quantity: 'length', wanted: 1, measured: 1, reason: null });
 const readback = (...severities: readonly Severity[]): Readback => ({ verdict: 'agrees', findings: severities.map(finding) });
 
 describe('counts and times in words', () => {
