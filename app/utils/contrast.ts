@@ -1,5 +1,6 @@
-/** Relative luminance of `#RRGGBB` (WCAG 2.2, definition of relative luminance), or NaN for anything else. */
-export function luminance(hex: string): number {
+/** Relative luminance of `#RRGGBB` or `#RGB` (WCAG 2.2, definition of relative luminance), or NaN for anything else. */
+export function luminance(colour: string): number {
+  const hex = colour.replace(/^#(.)(.)(.)$/, '#$1$1$2$2$3$3'); // a build shortens #FFFFFF to #fff
   if (!/^#[0-9a-f]{6}$/i.test(hex)) return NaN;
   const [r = 0, g = 0, b = 0] = [1, 3, 5].map((at) => {
     const part = Number.parseInt(hex.slice(at, at + 2), 16) / 255;

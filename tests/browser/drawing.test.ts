@@ -46,6 +46,7 @@ describe('the drawing is the form', () => {
   test('a size that cannot be read keeps the text and the last good drawing, and says what would work', async () => {
     const { page, context } = await openPage(browser, url);
     const lines = () => page.locator('.plan svg clipPath path').first().getAttribute('d');
+    await page.waitForTimeout(500); // the drawing takes the width it has been given
     const before = await lines();
     await type(page, 'railLength', '26 1/');
     await settle(page);

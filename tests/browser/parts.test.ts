@@ -15,6 +15,7 @@ describe("the developers' page of parts", () => {
       expect(await page.locator(`[data-state="${state}"] .size`).getAttribute('class'), state).toContain(looks);
     }
     // Contrast is worked out of what the browser holds: words stand out from the sheet, by day and by night.
+    await page.locator('[data-token="ink"] td').nth(1).filter({ hasText: /\d/ }).waitFor();
     for (const token of ['ink', 'ink-2', 'ink-3', 'crayon-ink', 'tape', 'brass-ink']) {
       for (const at of [1, 2]) expect(Number(await page.locator(`[data-token="${token}"] td`).nth(at).textContent()), token).toBeGreaterThanOrEqual(4.5);
     }
