@@ -92,7 +92,9 @@ describe('taking a program away', () => {
       const name = `${field} "${text}"`;
       await type(page, field, text);
       await page.locator('[data-download][aria-disabled="true"]').waitFor();
-      const notes = await page.locator(beside ? `[data-size="${beside}"].warned .note` : '.size.warned .note').allTextContents();
+      const beneath = page.locator(beside ? `[data-size="${beside}"].warned .note` : '.size.warned .note');
+      await beneath.filter({ hasText: /\S/ }).first().waitFor(); // what is refused comes from the core, a moment after the typing
+      const notes = await beneath.allTextContents();
       expect(notes.join(' '), name).toMatch(/Use |Try |Give /);
       expect(await box(page, field).inputValue(), name).toBe(text);
       await page.keyboard.press('Control+z');
@@ -102,5 +104,5 @@ describe('taking a program away', () => {
     await page.locator('[data-download]').waitFor();
     expect(complaints).toEqual([]);
     await context.close();
-  }, 300_000); // a hundred inputs, each typed, refused and taken back by the page
+  }, 600_000); // a hundred inputs, each typed, refused and taken back by the page
 });
