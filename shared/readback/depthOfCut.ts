@@ -87,7 +87,9 @@ function places(piece: Piece, order: number, index: PieceIndex, radius: number, 
   const apart = (SAME_PLACE * radius) / length;
   return open.flatMap(([from, to]) => {
     const inside = [from, ...bends.filter((t) => t > from && t < to).sort((a, b) => a - b), to];
-    const kept = inside.filter((t, i) => i === 0 || i === inside.length - 1 || t - (inside[i - 1] ?? 0) > apart);
+    // Thinned by the last one kept: many close bends in a row must still be looked at every so often.
+    const kept: number[] = [];
+    for (const t of inside) if (t === to || t - (kept[kept.length - 1] ?? -Infinity) > apart) kept.push(t);
     return kept.flatMap((t, i) => (i === 0 ? [t] : [(t + (kept[i - 1] ?? t)) / 2, t]));
   });
 }
