@@ -1,6 +1,7 @@
 import type { Step } from '#shared/reader/motion';
 import { type SlotSpec, railLength } from '#shared/slot/spec';
 import { type Units, MM_PER_INCH } from '#shared/measure/units';
+import type { PlanSizes } from './planView';
 
 /** CSS fixes the inch at 96 px, on paper too: a drawing in these units prints at true size at 100 %. */
 export const PX_PER_INCH = 96;
@@ -39,15 +40,8 @@ export interface Template {
   readonly level: readonly Join[];
 }
 
-/** What the template is drawn from, lengths in `units`. */
-export interface TemplateSizes {
-  readonly units: Units;
-  readonly railLength: number;
-  readonly railWidth: number;
-  readonly length: number;
-  readonly width: number;
-  readonly stopMargin: number;
-  readonly cornerRadius: number;
+/** What the template is drawn from: the plan's sizes, and the bit and where it is set to zero. */
+export interface TemplateSizes extends PlanSizes {
   readonly bitDiameter: number;
   readonly workZero: 'corner' | 'centre';
 }
