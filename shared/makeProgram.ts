@@ -1,4 +1,3 @@
-import { assert } from './assert';
 import { convertLength } from './measure/units';
 import { writeBody } from './program/body';
 import { GRID } from './program/grid';
@@ -79,18 +78,18 @@ export function makeProgram(request: SlotRequest): MadeProgram {
   const draft = read(writeProgram(request, path, body, null), request);
   const measured = measure(draft, request);
   const cautions = measured.findings.filter(({ severity }) => severity === 'caution').flatMap((finding) => sentenceOf(finding, spec.units).header ?? []);
-  const facts = { seconds: timed(draft, spec).seconds, cautions };
+  const draftTimeline = timed(draft, spec);
+  const facts = { seconds: draftTimeline.seconds, cautions };
   const program = writeProgram(request, path, body, facts);
   const final = read(program, request);
   const lines = draft.ok && final.ok ? linesBetween(draft.program.steps, final.program.steps) : null;
   const readback = lines === null ? measure(final, request) : movedDown(measured, lines);
 
-  const timeline = timed(final, spec);
+  const timeline = lines === null ? timed(final, spec) : { ...draftTimeline, steps: drawnSteps(final, spec) };
   const summary = summarise(request, path, timeline, final.ok ? final.program.lines : 0);
   const made = { spec, summary, readback, steps: timeline.steps, timeline };
   if (readback.verdict === 'disagrees') return { ok: false, ...made };
-  const mark = programMark(program);
-  assert(!options.comments || markIn(program) === mark, 'the text bears its own mark');
+  const mark = markIn(program) ?? programMark(program); // without comments a text bears none
   return { ok: true, program, fileName: programFileName(spec, mark, options.fileEnding), mark, sha256: sha256Hex(program), ...made };
 }
 
@@ -102,9 +101,14 @@ function measure(result: ReadResult, { spec, assumed }: SlotRequest): Readback {
   return result.ok ? readBack(result.program, spec, assumed.includes('railWidth')) : unreadable(result.error);
 }
 
-/** How long the steps take, in the spec's units. */
+/** What the reader saw, in the spec's units; nothing where it refused. */
+function drawnSteps(result: ReadResult, spec: SlotSpec): readonly Step[] {
+  return result.ok ? stepsIn(spec.units, result.program) : [];
+}
+
+/** How long the steps take. */
 function timed(result: ReadResult, spec: SlotSpec): Timeline {
-  return timeOf(result.ok ? stepsIn(spec.units, result.program) : [], defaultDynamics(spec.units, spec.machine));
+  return timeOf(drawnSteps(result, spec), defaultDynamics(spec.units, spec.machine));
 }
 
 function summarise({ spec, assumed, notes }: SlotRequest, path: SlotPath, timeline: Timeline, lines: number): ProgramSummary {

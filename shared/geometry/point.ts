@@ -8,3 +8,8 @@ export interface Point2 {
 export interface Point3 extends Point2 {
   readonly z: number;
 }
+
+/** Length of a plane vector. Math.hypot also guards against sizes that no rail has, at several times the cost. */
+export function norm(x: number, y: number): number {
+  return Math.sqrt(x * x + y * y);
+}

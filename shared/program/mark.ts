@@ -27,7 +27,9 @@ function bareText(text: string): string {
 }
 
 function bareLine(line: string): string {
-  if (line.startsWith('(') && line.indexOf(')') === line.length - 1) return line; // most of a header: one comment, nothing else
+  // The two lines of which nearly every program is made: one comment and nothing else, and words alone.
+  if (line.startsWith('(') && line.indexOf(')') === line.length - 1) return line;
+  if (!line.includes('(') && !line.includes('\t')) return line.replaceAll(' ', '').replace(/^N\d+/i, '');
   return line.replace(/\([^)]*\)|[ \t]+/g, (part) => (part.startsWith('(') ? part : '')).replace(/^N\d+/i, '');
 }
 

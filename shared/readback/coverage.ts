@@ -1,4 +1,4 @@
-import type { Point2 } from '../geometry/point';
+import { type Point2, norm } from '../geometry/point';
 import type { Piece } from './cut';
 
 /** The area that must be cleared, given by its ends and by the two edges above each X. */
@@ -102,7 +102,7 @@ function sweepAt({ x0, y0, x1, y1 }: Piece, x: number, radius: number): [number,
   disc(x0, y0);
   disc(x1, y1);
   const [dx, dy] = [x1 - x0, y1 - y0];
-  const length = Math.hypot(dx, dy);
+  const length = norm(dx, dy);
   if (dx !== 0) {
     // The strip's two long edges are the piece moved sideways by the radius; each spans its own stretch of X.
     for (const side of [1, -1]) {

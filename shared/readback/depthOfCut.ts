@@ -1,4 +1,4 @@
-import type { Point3 } from '../geometry/point';
+import { type Point3, norm } from '../geometry/point';
 import type { Piece } from './cut';
 import { PieceIndex } from './pieceIndex';
 
@@ -56,7 +56,7 @@ function along(piece: Piece, t: number): Point3 {
 
 /** Directions across a piece; a plunge has none of its own, so it is looked at both ways. */
 function across({ x0, y0, x1, y1 }: Piece): readonly (readonly [number, number])[] {
-  const length = Math.hypot(x1 - x0, y1 - y0);
+  const length = norm(x1 - x0, y1 - y0);
   return length === 0 ? [[1, 0], [0, 1]] : [[-(y1 - y0) / length, (x1 - x0) / length]];
 }
 
@@ -69,21 +69,22 @@ function across({ x0, y0, x1, y1 }: Piece): readonly (readonly [number, number])
  */
 function places(piece: Piece, order: number, index: PieceIndex, radius: number, depth: number): number[] {
   const [dx, dy] = [piece.x1 - piece.x0, piece.y1 - piece.y0];
-  const length = Math.hypot(dx, dy);
+  const length = norm(dx, dy);
   if (length === 0) return [1];
   const project = (x: number, y: number) => ((x - piece.x0) * dx + (y - piece.y0) * dy) / (length * length);
   let open: (readonly [number, number])[] = [[0, 1]];
   const bends: number[] = [];
-  for (const other of index.newestFirst(along(piece, 0.5), order, length / 2 + radius)) {
+  index.newestFirst(along(piece, 0.5), order, length / 2 + radius, (other) => {
     const [a, b] = [project(other.x0, other.y0), project(other.x1, other.y1)];
     bends.push(a, b, a - radius / length, a + radius / length, b - radius / length, b + radius / length);
-    if (Math.abs(offLine(piece, other.x0, other.y0)) > NOISE || Math.abs(offLine(piece, other.x1, other.y1)) > NOISE) continue;
+    if (Math.abs(offLine(piece, other.x0, other.y0)) > NOISE || Math.abs(offLine(piece, other.x1, other.y1)) > NOISE) return false;
     const [from, to] = [Math.min(a, b), Math.max(a, b)];
     const above = (t: number) => heightNear(other, along(piece, t).x, along(piece, t).y) - along(piece, t).z;
-    if (Math.max(above(Math.max(0, from)), above(Math.min(1, to))) > depth) continue;
+    if (Math.max(above(Math.max(0, from)), above(Math.min(1, to))) > depth) return false;
     open = without(open, from, to);
-    if (open.length === 0) return [];
-  }
+    return open.length === 0;
+  });
+  if (open.length === 0) return [];
   const apart = (SAME_PLACE * radius) / length;
   return open.flatMap(([from, to]) => {
     const inside = [from, ...bends.filter((t) => t > from && t < to).sort((a, b) => a - b), to];
@@ -96,7 +97,7 @@ function places(piece: Piece, order: number, index: PieceIndex, radius: number, 
 
 /** How far a point lies beside the line of a piece. */
 function offLine({ x0, y0, x1, y1 }: Piece, x: number, y: number): number {
-  return ((x1 - x0) * (y - y0) - (y1 - y0) * (x - x0)) / Math.hypot(x1 - x0, y1 - y0);
+  return ((x1 - x0) * (y - y0) - (y1 - y0) * (x - x0)) / norm(x1 - x0, y1 - y0);
 }
 
 /** Stretches less one. */
@@ -152,18 +153,20 @@ function coversAbove(line: Line, order: number, index: PieceIndex, depth: number
   if (-line.at.z <= depth) return null;
   const covers: Cover[] = [];
   let open: (readonly [number, number])[] = [[line.low, line.high]];
-  for (const piece of index.newestFirst(line.at, order, line.radius)) {
+  let closed = false;
+  index.newestFirst(line.at, order, line.radius, (piece) => {
     const stretch = stretchAcross(piece, line);
-    if (!stretch) continue;
+    if (!stretch) return false;
     const [from, to] = [Math.max(stretch[0], line.low), Math.min(stretch[1], line.high)];
-    if (from >= to) continue;
+    if (from >= to) return false;
     covers.push({ from, to, piece });
     // Heights run evenly along the stretch, so its two ends bound them.
-    if (Math.max(heightAt(line, from, piece), heightAt(line, to, piece)) - line.at.z > depth) continue;
+    if (Math.max(heightAt(line, from, piece), heightAt(line, to, piece)) - line.at.z > depth) return false;
     open = without(open, from, to);
-    if (open.reduce((sum, [low, high]) => sum + high - low, 0) <= narrow) return null;
-  }
-  return covers;
+    closed = open.reduce((sum, [low, high]) => sum + high - low, 0) <= narrow;
+    return closed;
+  });
+  return closed ? null : covers;
 }
 
 /** The greatest depth that is taken over more than `narrow` of the line. */
@@ -210,7 +213,7 @@ function stretchAcross(piece: Piece, { at, nx, ny, radius }: Line): [number, num
   disc(piece.x0, piece.y0);
   disc(piece.x1, piece.y1);
   const [dx, dy] = [piece.x1 - piece.x0, piece.y1 - piece.y0];
-  const length = Math.hypot(dx, dy);
+  const length = norm(dx, dy);
   const turn = dx * ny - dy * nx;
   if (Math.abs(turn) > 1e-12 * length) {
     for (const side of [1, -1]) {

@@ -1,4 +1,4 @@
-import type { Point2 } from '../geometry/point';
+import { type Point2, norm } from '../geometry/point';
 import type { Piece } from './cut';
 
 /** A part of the line that the bit's centre must follow so that the cutter makes a wall: straight, or round a centre. */
@@ -41,12 +41,12 @@ export function follows(part: EdgePart, pieces: readonly Piece[], within: number
 }
 
 function distance(a: Point2, b: Point2): number {
-  return Math.hypot(a.x - b.x, a.y - b.y);
+  return norm(a.x - b.x, a.y - b.y);
 }
 
 function distanceTo({ x0, y0, x1, y1 }: Piece, { x, y }: Point2): number {
   const [dx, dy] = [x1 - x0, y1 - y0];
   const square = dx * dx + dy * dy;
   const t = square === 0 ? 0 : Math.min(1, Math.max(0, ((x - x0) * dx + (y - y0) * dy) / square));
-  return Math.hypot(x0 + t * dx - x, y0 + t * dy - y);
+  return norm(x0 + t * dx - x, y0 + t * dy - y);
 }

@@ -36,8 +36,18 @@ export class PieceIndex {
     });
   }
 
-  /** Pieces before `order` that run through cells within `reach` + one radius of a place, newest first, each once. */
-  * newestFirst(at: Point2, order: number, reach: number): Generator<Piece> {
+  /**
+   * Visits the pieces before `order` that run through cells within `reach` + one radius of a place, newest first, each
+   * once, until `visit` answers true.
+   */
+  newestFirst(at: Point2, order: number, reach: number, visit: (piece: Piece) => boolean): void {
+    if (this.columns * this.rows === 1) {
+      for (let i = order - 1; i >= 0; i--) {
+        const piece = this.pieces[i];
+        if (piece && visit(piece)) return;
+      }
+      return;
+    }
     const lists: number[][] = [];
     this.eachCell(at.x - 2 * reach, at.x + 2 * reach, at.y - 2 * reach, at.y + 2 * reach, (cell) => {
       const list = this.cells[cell];
@@ -53,8 +63,7 @@ export class PieceIndex {
         if (at >= 0) newest = Math.max(newest, lists[i]?.[at] ?? -1);
       }
       const piece = this.pieces[newest];
-      if (newest < 0 || !piece) return;
-      yield piece;
+      if (newest < 0 || !piece || visit(piece)) return;
       last = newest;
     }
   }

@@ -34,12 +34,14 @@ function samePoint(a: Point3, b: Point3): boolean {
   return Object.is(a.x, b.x) && Object.is(a.y, b.y) && Object.is(a.z, b.z);
 }
 
+const isData = (value: unknown): value is Readonly<Record<string, unknown>> => typeof value === 'object' && value !== null;
+
 /** Plain data, compared all the way down; NaN is NaN. */
 function sameData(a: unknown, b: unknown): boolean {
   if (Object.is(a, b)) return true;
-  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return false;
-  const [left, right] = [Object.entries(a), Object.entries(b)];
-  return left.length === right.length && left.every(([key, value], i) => right[i]?.[0] === key && sameData(value, right[i]?.[1]));
+  if (!isData(a) || !isData(b)) return false;
+  const keys = Object.keys(a);
+  return keys.length === Object.keys(b).length && keys.every((key) => key in b && sameData(a[key], b[key]));
 }
 
 /** A readback with its findings some lines further down; what is said of the whole program stays at its first line. */

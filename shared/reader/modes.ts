@@ -37,5 +37,5 @@ export const AFTER_END: Partial<Modes> = {
 
 /** The modes with a change; call it only where something changes, so that steps share one object. */
 export function withModes(modes: Modes, change: Partial<Modes>): Modes {
-  return Object.freeze({ ...modes, ...change });
+  return { ...modes, ...change };
 }

@@ -6,6 +6,9 @@ import { emptyRequest, sortWords } from './request';
 import { scanLines } from './scan';
 import { readBlocks } from './words';
 
+/** Filled again for every line of every program, as the scanner's line is. */
+const SCRATCH = emptyRequest();
+
 /**
  * Reads a program in RS-274/NGC as NISTIR 6556 defines it: text to motions and events, in their order of execution.
  *
@@ -15,7 +18,7 @@ import { readBlocks } from './words';
  */
 export function readProgram(text: string, options: ReadOptions = {}): ReadResult {
   const machine = startMachine(options);
-  const request = emptyRequest();
+  const request = SCRATCH;
   const scan = scanLines(text, (line) => (machine.ended ? null : (sortWords(line, request) ?? execute(machine, request))));
   if (!scan.ok) return scan;
   const { comments, percent, lines } = scan;

@@ -44,6 +44,9 @@ const POWERS_OF_TEN = Float64Array.from({ length: EXACT_DIGITS + 1 }, (_, n) => 
 /** NISTIR 6556 3.3.2.4: recognised so that they can be refused by name. */
 const FUNCTION = /^(?:abs|acos|asin|atan|cos|exp|fix|fup|ln|round|sin|sqrt|tan)(?=\[)/i;
 
+/** The one line that every scan fills: a visitor keeps nothing of it and starts no scan, and making its columns anew costs as much as reading a short program. */
+const SCRATCH = emptyLine();
+
 /**
  * Scans a text line by line, strictly by NISTIR 6556 3.1, 3.3 and Appendix E: what is not allowed is an error.
  * `visit` is called for every line with a word, a number or a slash; it stops the scan by returning an error.
@@ -53,7 +56,7 @@ const FUNCTION = /^(?:abs|acos|asin|atan|cos|exp|fix|fup|ln|round|sin|sqrt|tan)(
  */
 export function scanLines(text: string, visit: (line: Line) => ReadError | null): ScanResult {
   const cursor: Cursor = { text, i: 0, line: 1, lineStart: 0, failure: null, comments: [] };
-  const line = emptyLine();
+  const line = SCRATCH;
   let opened = false;
   let closed = false;
   let blank = true;

@@ -1,4 +1,4 @@
-import type { Point2 } from '../geometry/point';
+import { type Point2, norm } from '../geometry/point';
 import type { SlotSpec } from './spec';
 
 /** +1 counterclockwise, -1 clockwise, seen from above. */
@@ -75,7 +75,7 @@ export function lapAt(area: CentreArea, inset: number, turn: Turn): Lap {
 
   let from = at(-s, -b);
   const sides = corners.map(({ to, centre }) => {
-    const side = { from, to, centre, length: Math.hypot(to.x - from.x, to.y - from.y) };
+    const side = { from, to, centre, length: norm(to.x - from.x, to.y - from.y) };
     from = to;
     return side;
   }).filter((side) => side.length > 0);

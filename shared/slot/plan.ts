@@ -1,4 +1,4 @@
-import type { Point2 } from '../geometry/point';
+import { type Point2, norm } from '../geometry/point';
 import { assert } from '../assert';
 import { type Go, openLap, openLine } from './entry';
 import { type Lap, type Side, distanceAlong, pointAlong } from './lap';
@@ -70,12 +70,12 @@ function goFinish(lap: Lap, middle: Point2, from: Point2, level: number, spec: S
     const foot = near > 2 * spec.finishAllowance ? near : Math.min(spec.bitDiameter, side.length / 2);
     const room = side.from.y === side.to.y ? Math.min(lead, side.length - foot) : 0;
     const at = pointAlong(side, foot);
-    return { index, side, foot, room, away: Math.hypot(at.x - from.x, at.y - from.y) };
+    return { index, side, foot, room, away: norm(at.x - from.x, at.y - from.y) };
   }).sort((a, b) => b.room - a.room || a.away - b.away);
   assert(best, 'a finish lap has sides');
   const off = inwardOf(best.side, best.foot, spec.finishAllowance);
   const on = pointAlong(best.side, best.foot + best.room);
-  if (Math.hypot(off.x - from.x, off.y - from.y) > spec.bitDiameter / 100) go({ x: off.x, y: middle.y }, level, 'pass');
+  if (norm(off.x - from.x, off.y - from.y) > spec.bitDiameter / 100) go({ x: off.x, y: middle.y }, level, 'pass');
   go(off, level, 'pass');
   goRound(lap, best.index, on, level, 'finish', go);
   go(off, level, 'finish');
@@ -86,7 +86,7 @@ function inwardOf(side: Side, distance: number, inset: number): Point2 {
   const at = pointAlong(side, distance);
   const { from, to, centre } = side;
   const [x, y] = centre ? [centre.x - at.x, centre.y - at.y] : [from.y - to.y, to.x - from.x];
-  const scale = inset / Math.hypot(x, y);
+  const scale = inset / norm(x, y);
   return { x: at.x + x * scale, y: at.y + y * scale };
 }
 

@@ -1,4 +1,4 @@
-import type { Point3 } from '../../geometry/point';
+import { type Point3, norm } from '../../geometry/point';
 import type { Motion } from '../../reader/motion';
 import { isOneBit } from '../../slot/spec';
 import { type Cut, piecesBelow } from '../cut';
@@ -37,7 +37,7 @@ export function depthsOfCut(cut: Cut): Finding[] {
 
 /** Length of a motion in plan; of an arc along the arc. */
 function planLength({ arc, from, to }: Motion): number {
-  return arc ? arc.radius * arc.sweep : Math.hypot(to.x - from.x, to.y - from.y);
+  return arc ? arc.radius * arc.sweep : norm(to.x - from.x, to.y - from.y);
 }
 
 /** Cutting motions that go down in the wood, and how far below the top. */
@@ -90,7 +90,7 @@ export const laps: Rule = (cut) => {
     const [from, middle, to] = [0.1, 0.5, 0.9].map((t) => ({ x: piece.x0 + t * (piece.x1 - piece.x0) - cx, y: piece.y0 + t * (piece.y1 - piece.y0) - cy }));
     if (!from || !middle || !to) return [];
     const past = [from, middle, to].map(({ x, y }) => pastSlot(cut, x + cx, y + cy) + spec.bitDiameter / 2);
-    if (Math.max(...past) - Math.min(...past) > 2 * step || Math.hypot(to.x - from.x, to.y - from.y) < spec.bitDiameter / 4) return [];
+    if (Math.max(...past) - Math.min(...past) > 2 * step || norm(to.x - from.x, to.y - from.y) < spec.bitDiameter / 4) return [];
     const inset = -(past[1] ?? 0);
     if (inset > (spec.width - spec.bitDiameter) / 2 - 2 * step) return []; // the middle line has no side
     return [{ piece, climbs: from.x * to.y - from.y * to.x > 0, finishes: spec.finishAllowance > 0 && inset < spec.finishAllowance / 2 }];

@@ -1,3 +1,4 @@
+import { norm } from '../../geometry/point';
 import { byUnits } from '../../measure/units';
 import type { Motion } from '../../reader/motion';
 import { advisedChipLoad, chipLoad as feedPerTooth } from '../../slot/chipLoad';
@@ -83,10 +84,10 @@ export const plungeFeed: Rule = (cut) => {
   for (const { motion } of cut.pieces) {
     const { from, to } = motion;
     if (motion.kind === 'rapid' || to.z >= from.z || motion.feed === null) continue;
-    const along = motion.arc ? motion.arc.radius * motion.arc.sweep : Math.hypot(to.x - from.x, to.y - from.y);
+    const along = motion.arc ? motion.arc.radius * motion.arc.sweep : norm(to.x - from.x, to.y - from.y);
     // Depths are written in whole steps of the last decimal: one step of fall may be rounding.
     const fall = along > 0 ? Math.max(0, from.z - to.z - cut.step) : from.z - to.z;
-    const down = (motion.feed * fall) / Math.hypot(along, fall);
+    const down = (motion.feed * fall) / norm(along, fall);
     if (down > measured) [measured, fastest] = [down, motion];
   }
   const slack = byUnits(spec.units, 0.1, 1); // a feed is written with one decimal

@@ -1,3 +1,4 @@
+import { norm } from '../../geometry/point';
 import { type SlotSpec, isOneBit } from '../../slot/spec';
 import type { Cut } from '../cut';
 
@@ -28,5 +29,5 @@ export function pastSlot(cut: Cut, x: number, y: number, inset = 0): number {
   const corner = cut.spec.ends === 'round' ? shape.corner - inset : shape.corner;
   const dx = Math.abs(x - shape.x) - (shape.halfLength - inset - corner);
   const dy = Math.abs(y - shape.y) - (shape.halfWidth - inset - corner);
-  return (dx > 0 && dy > 0 ? Math.hypot(dx, dy) : Math.max(dx, dy)) - corner;
+  return (dx > 0 && dy > 0 ? norm(dx, dy) : Math.max(dx, dy)) - corner;
 }
