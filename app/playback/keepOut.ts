@@ -1,8 +1,10 @@
 import { BoxGeometry, Group, Mesh, ShaderMaterial } from 'three';
 import type { StageSizes } from '#shared/playback/index';
-import { type Screen, asSegments, boxEdges, lineGeometry, lineMesh, pieceOf } from './lines';
+import { type Screen, asSegments, boxEdges, lineGeometry, lineMesh } from './lines';
+import { packLines } from './packLines';
 import type { Palette } from './palette';
 import { HATCH_FRAGMENT, HATCH_VERTEX } from './shaders';
+import { pieceOf } from './workOut';
 
 /** The room where clamps may stand: hatched air with dashed edges, so that it cannot be taken for a thing. */
 export function keepOutGroup({ keepOut, rail }: StageSizes, palette: Palette, screen: Screen): Group {
@@ -23,7 +25,7 @@ export function keepOutGroup({ keepOut, rail }: StageSizes, palette: Palette, sc
     hatch.renderOrder = 30;
     group.add(hatch);
     // Nothing has been travelled here, so every edge is "ahead": dashed.
-    group.add(lineMesh(lineGeometry(asSegments(boxEdges(box, box.y0)), pieceOf(rail)), screen, { colour: palette.rule, width: 1.2, travel: { value: -1 }, order: 31 }));
+    group.add(lineMesh(lineGeometry(packLines(asSegments(boxEdges(box, box.y0)), pieceOf(rail))), screen, { colour: palette.rule, width: 1.2, travel: { value: -1 }, order: 31 }));
   }
   return group;
 }

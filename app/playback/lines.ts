@@ -1,6 +1,7 @@
 import { Float32BufferAttribute, GreaterDepth, Group, InstancedBufferAttribute, InstancedBufferGeometry, LessEqualDepth, Mesh, ShaderMaterial } from 'three';
 import type { Color, IUniform, Vector2, BufferGeometry } from 'three';
 import type { Box, Segments } from '#shared/playback/index';
+import { type PackedLines, packLines } from './packLines';
 import { LINE_FRAGMENT, LINE_VERTEX } from './shaders';
 
 /** What every line and outline needs to know of the canvas; one object, so that a resize sets it once. */
@@ -29,49 +30,15 @@ export interface LineLook {
   readonly field?: Record<string, IUniform>;
 }
 
-/**
- * Cuts long pieces up. A line that runs the length of the rail is a sliver thousands of times longer than wide, and in a
- * near view the card's depth along such a one is off by more than the line lies over the wood.
- */
-function cutUp({ count, ends, travel, rapid, finish }: Segments, longest: number): Segments {
-  const parts = Array.from({ length: count }, (_, i) => Math.max(1, Math.ceil(Math.hypot(...[0, 1, 2].map((k) => (ends[i * 6 + 3 + k] ?? 0) - (ends[i * 6 + k] ?? 0))) / longest)));
-  const total = parts.reduce((sum, n) => sum + n, 0);
-  const cut = { count: total, ends: new Float64Array(total * 6), travel: new Float64Array(total * 2), rapid: new Uint8Array(total), finish: new Uint8Array(total) };
-  const between = (of: Float64Array, from: number, step: number, share: number) => (of[from] ?? 0) + ((of[from + step] ?? 0) - (of[from] ?? 0)) * share;
-  let at = 0;
-  parts.forEach((n, i) => {
-    for (let part = 0; part < n; part++, at++) {
-      for (const end of [0, 1] as const) {
-        const share = (part + end) / n;
-        for (let k = 0; k < 3; k++) cut.ends[at * 6 + end * 3 + k] = between(ends, i * 6 + k, 3, share);
-        cut.travel[at * 2 + end] = between(travel, i * 2, 1, share);
-      }
-      cut.rapid[at] = rapid[i] ?? 0;
-      cut.finish[at] = finish?.[i] ?? 0;
-    }
-  });
-  return cut;
-}
-
-/** Long enough that a rail's edge is a few dozen pieces. */
-export const pieceOf = ({ x0, x1 }: Box): number => (x1 - x0) / 32;
-
 /** One quad for each piece of line; every look at it shares them. */
-export function lineGeometry(segments: Segments, longest: number): InstancedBufferGeometry {
-  const { count, ends, travel, rapid, finish } = cutUp(segments, longest);
+export function lineGeometry({ count, from, to, travel, kind }: PackedLines): InstancedBufferGeometry {
   const geometry = new InstancedBufferGeometry();
   geometry.setAttribute('position', new Float32BufferAttribute([0, -0.5, 0, 1, -0.5, 0, 1, 0.5, 0, 0, 0.5, 0], 3));
   geometry.setIndex([0, 1, 2, 0, 2, 3]);
-  const pick = (of: Float64Array, size: number, from: number, each: number) => {
-    const picked = new Float32Array(count * size);
-    for (let i = 0; i < count; i++) for (let k = 0; k < size; k++) picked[i * size + k] = of[i * each + from + k] ?? 0;
-    return new InstancedBufferAttribute(picked, size);
-  };
-  geometry.setAttribute('aFrom', pick(ends, 3, 0, 6));
-  geometry.setAttribute('aTo', pick(ends, 3, 3, 6));
-  geometry.setAttribute('aTravel', pick(travel, 2, 0, 2));
-  // 1 for a rapid, -1 for a finish lap, 0 for any other cut.
-  geometry.setAttribute('aRapid', new InstancedBufferAttribute(Float32Array.from(rapid, (one, i) => one - (finish?.[i] ?? 0)), 1));
+  geometry.setAttribute('aFrom', new InstancedBufferAttribute(from, 3));
+  geometry.setAttribute('aTo', new InstancedBufferAttribute(to, 3));
+  geometry.setAttribute('aTravel', new InstancedBufferAttribute(travel, 2));
+  geometry.setAttribute('aRapid', new InstancedBufferAttribute(kind, 1));
   geometry.instanceCount = count;
   return geometry;
 }
@@ -125,14 +92,14 @@ export function asSegments(lines: readonly Line[]): Segments {
 /** The edge of the section: along the top, down into the cut and up again, as deep as it is at the moment. */
 export function profileLine(line: readonly { readonly x: number; readonly crossing: number }[], y: number, z: number, screen: Screen, look: LineLook): Mesh {
   const pairs = line.slice(1).map((to, i) => [line[i] ?? to, to] as const);
-  const geometry = lineGeometry(asSegments(pairs.map(([from, to]) => [from.x, y, z, to.x, y, z])), Infinity);
+  const geometry = lineGeometry(packLines(asSegments(pairs.map(([from, to]) => [from.x, y, z, to.x, y, z])), Infinity));
   geometry.setAttribute('aCrossings', new InstancedBufferAttribute(Float32Array.from(pairs.flatMap(([from, to]) => [from.crossing, to.crossing])), 2));
   return lineMesh(geometry, screen, look);
 }
 
 /** The path: over the wood in full, through it faintly; over a pale casing on dark woods. */
-export function pathLines(segments: Segments, screen: Screen, longest: number, colours: { crayon: Color; rapid: Color; casing: Color | null }, shared: Pick<LineLook, 'travel' | 'section' | 'middle'>): Group {
-  const geometry = lineGeometry(segments, longest);
+export function pathLines(lines: PackedLines, screen: Screen, colours: { crayon: Color; rapid: Color; casing: Color | null }, shared: Pick<LineLook, 'travel' | 'section' | 'middle'>): Group {
+  const geometry = lineGeometry(lines);
   const group = new Group();
   const path = { ...shared, colour: colours.crayon, rapidColour: colours.rapid };
   if (colours.casing) group.add(lineMesh(geometry, screen, { ...shared, colour: colours.casing, width: 5.5, order: 10, opacity: 0.9 }));

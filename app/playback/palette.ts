@@ -8,6 +8,8 @@ const TOKENS = {
   crayon: ['--crayon-on-wood', '#c8341b'],
   rapid: ['--crayon', '#c8341b'],
   casing: ['--case', ''],
+  tape: ['--tape', '#1b5fa8'],
+  sheet: ['--sheet', '#ffffff'],
   steel: ['--steel', '#9aa6ae'],
   steelHi: ['--steel-hi', '#c9d1d6'],
   steelLo: ['--steel-lo', '#66747e'],
@@ -28,7 +30,7 @@ export function readPalette(element: Element): Palette {
   const colour = (name: Name) => raw(read(TOKENS[name]));
   const casing = read(TOKENS.casing);
   return {
-    ground: colour('ground'), ink: colour('ink'), rule: colour('rule'), crayon: colour('crayon'), rapid: colour('rapid'),
+    ground: colour('ground'), ink: colour('ink'), rule: colour('rule'), crayon: colour('crayon'), rapid: colour('rapid'), tape: colour('tape'), sheet: colour('sheet'),
     steel: colour('steel'), steelHi: colour('steelHi'), steelLo: colour('steelLo'),
     wood: colour('wood'), woodHi: colour('woodHi'), woodLo: colour('woodLo'), woodGrain: colour('woodGrain'), woodDeep: colour('woodDeep'),
     casing: casing ? raw(casing) : null,

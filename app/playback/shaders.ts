@@ -176,6 +176,36 @@ export const STEEL_FRAGMENT = /* glsl */ `
   }
 `;
 
+/** The place of a reading, drawn round its point in the page's pixels whatever the distance. */
+export const MARKER_VERTEX = /* glsl */ `
+  uniform vec3 uPlace;
+  uniform vec2 uSize;
+  uniform float uReach, uPixels;
+  varying vec2 vOff;
+  void main() {
+    vOff = position.xy * uReach;
+    gl_Position = projectionMatrix * viewMatrix * vec4(uPlace, 1.0);
+    gl_Position.xy += vOff * uPixels * 2.0 / uSize * gl_Position.w;
+  }
+`;
+
+export const MARKER_FRAGMENT = /* glsl */ `
+  varying vec2 vOff;
+  uniform vec3 uColour, uCasing;
+  uniform float uPixels;
+  float inked(float off, float half_) { return clamp((half_ - off) * uPixels + 0.5, 0.0, 1.0); }
+  void main() {
+    float far = length(vOff);
+    float ring = abs(far - 13.0);
+    // Ticks run outward from the ring; within it nothing hides the place itself.
+    float tick = max(min(abs(vOff.x), abs(vOff.y)), max(13.0 - far, far - 22.0));
+    float off = min(ring, tick);
+    float casing = inked(off, 3.5);
+    if (casing == 0.0) discard;
+    gl_FragColor = vec4(mix(uCasing, uColour, inked(off, 1.5)), casing);
+  }
+`;
+
 /** The clamps' room: air that nothing may enter, so only hatched. */
 export const HATCH_VERTEX = /* glsl */ `
   varying vec3 vPlace;

@@ -1,21 +1,23 @@
-import { BufferGeometry, DataTexture, Group, Material, Mesh, Vector2 } from 'three';
+import { BufferGeometry, DataTexture, Group, Material, Mesh, Vector2, Vector3 } from 'three';
 import type { CanvasTexture, IUniform, Object3D } from 'three';
-import type { Removal, Segments, StageSizes } from '#shared/playback/index';
+import type { StageSizes } from '#shared/playback/index';
+import type { Point3 } from '#shared/geometry/point';
 import type { SlotSpec } from '#shared/slot/spec';
 import type { Moment } from '#shared/time/index';
 import { bitGroup } from './bit';
 import { endGrain, longGrain } from './grain';
 import { keepOutGroup } from './keepOut';
-import { type Screen, asSegments, boxEdges, lineGeometry, lineMesh, pathLines, pieceOf, profileLine } from './lines';
+import { type Screen, asSegments, boxEdges, lineGeometry, lineMesh, pathLines, profileLine } from './lines';
+import { markerMesh } from './marker';
+import { packLines } from './packLines';
 import type { Palette } from './palette';
 import { fieldUniforms, middleLine, middleOf, woodGroup } from './wood';
+import { type WorkedOut, pieceOf } from './workOut';
 
 /** What the stage shows, worked out beforehand. */
-export interface StageParts {
+export interface StageParts extends WorkedOut {
   readonly sizes: StageSizes;
   readonly spec: Pick<SlotSpec, 'flutes' | 'bitKind'>;
-  readonly segments: Segments;
-  readonly removal: Removal | null;
 }
 
 /** A travel that no line is ahead of: outlines are solid. */
@@ -40,12 +42,14 @@ export class Stage {
   private wood: Group | null = null;
   private edges: Object3D | null = null;
   private halfEdges: Object3D | null = null;
+  private marker: ReturnType<typeof markerMesh> | null = null;
+  private pointed: Point3 | null = null;
 
   private readonly field: Record<string, IUniform>;
 
   constructor(private readonly parts: StageParts, palette: Palette) {
     this.sizes = parts.sizes;
-    this.field = fieldUniforms(parts.removal);
+    this.field = fieldUniforms(parts.field);
     this.paint(palette);
   }
 
@@ -53,24 +57,26 @@ export class Stage {
   paint(palette: Palette): void {
     const old = this.bit;
     this.clear();
-    const { sizes, spec, segments, removal } = this.parts;
+    const { sizes, spec, lines, field } = this.parts;
     const { rail } = sizes;
-    const middle = middleOf(rail, removal);
-    this.wood = woodGroup(rail, removal, this.field, palette, { travel: this.travel, section: this.section, long: this.long, end: this.end });
+    const middle = middleOf(rail, field);
+    this.wood = woodGroup(rail, field, this.field, palette, { travel: this.travel, section: this.section, long: this.long, end: this.end });
     this.edges = this.outline(boxEdges(rail, rail.y0), palette);
     this.halfEdges = new Group().add(
       this.outline(boxEdges(rail, middle, false), palette),
-      profileLine(middleLine(rail, removal), middle, rail.z1, this.screen, { colour: palette.ink, width: 2, travel: this.travel, order: 5, ...(removal ? { field: this.field } : {}) }),
+      profileLine(middleLine(rail, field), middle, rail.z1, this.screen, { colour: palette.ink, width: 2, travel: this.travel, order: 5, ...(field ? { field: this.field } : {}) }),
     );
     this.bit = bitGroup(sizes, spec, palette, this.screen);
     if (old) {
       this.bit.group.position.copy(old.group.position);
       this.bit.holder.visible = old.holder.visible;
     }
-    this.root.add(this.wood, this.edges, this.halfEdges, pathLines(segments, this.screen, pieceOf(rail), palette, { travel: this.travel, section: this.section, middle }), this.bit.group, keepOutGroup(sizes, palette, this.screen));
+    this.marker = markerMesh(palette, this.screen);
+    this.root.add(this.wood, this.edges, this.halfEdges, pathLines(lines, this.screen, palette, { travel: this.travel, section: this.section, middle }), this.bit.group, keepOutGroup(sizes, palette, this.screen), this.marker);
     // Nothing here is pointed at: without this every move of the pointer would be tried against every triangle.
     this.root.traverse((part) => (part.raycast = () => undefined));
     this.showSection(this.section.value);
+    this.point(this.pointed);
   }
 
   /** Sets the picture to a moment of the program. */
@@ -81,6 +87,15 @@ export class Stage {
     // Before the program has said where the bit is, it waits over the work zero.
     this.bit.group.position.set(stated(moment.x, rail.x0), stated(moment.y, rail.y0), stated(moment.z, safeHeight));
     this.bit.turning.rotation.z = -seconds * TURNS * 2 * Math.PI;
+  }
+
+  /** Marks a place of the program, or none. */
+  point(place: Point3 | null): void {
+    this.pointed = place;
+    if (!this.marker) return;
+    this.marker.visible = place !== null;
+    const at: unknown = this.marker.material.uniforms.uPlace?.value;
+    if (place && at instanceof Vector3) at.set(place.x, place.y, place.z);
   }
 
   showSection(on: boolean): void {
@@ -111,7 +126,7 @@ export class Stage {
   }
 
   private outline(lines: Parameters<typeof asSegments>[0], palette: Palette): Object3D {
-    return lineMesh(lineGeometry(asSegments(lines), pieceOf(this.sizes.rail)), this.screen, { colour: palette.ink, width: 2, lift: 0.005, travel: { value: BEHIND }, order: 5 });
+    return lineMesh(lineGeometry(packLines(asSegments(lines), pieceOf(this.sizes.rail))), this.screen, { colour: palette.ink, width: 2, lift: 0.005, travel: { value: BEHIND }, order: 5 });
   }
 
   private clear(): void {

@@ -1,8 +1,9 @@
-import { BufferGeometry, DataTexture, DoubleSide, Float32BufferAttribute, FloatType, Group, Mesh, NearestFilter, RGBAFormat, ShaderMaterial, Uint32BufferAttribute } from 'three';
+import { BufferAttribute, BufferGeometry, DataTexture, DoubleSide, Float32BufferAttribute, FloatType, Group, Mesh, NearestFilter, RGBAFormat, ShaderMaterial } from 'three';
 import type { IUniform, Texture } from 'three';
-import { type Box, type Removal, packFalls } from '#shared/playback/index';
+import type { Box } from '#shared/playback/index';
 import type { Palette } from './palette';
 import { WOOD_FRAGMENT, WOOD_VERTEX } from './shaders';
+import type { CutField } from './workOut';
 
 /** What the wood's parts share; one object each, so that a frame sets each once. */
 export interface WoodUniforms {
@@ -13,10 +14,10 @@ export interface WoodUniforms {
 }
 
 /** The rail: a block whose top is left open where the cut is, the net that fills it, and the face a section shows. */
-export function woodGroup(rail: Box, removal: Removal | null, field: Record<string, IUniform>, palette: Palette, shared: WoodUniforms): Group {
+export function woodGroup(rail: Box, cut: CutField | null, field: Record<string, IUniform>, palette: Palette, shared: WoodUniforms): Group {
   const group = new Group();
   const wide = rail.y1 - rail.y0;
-  const middle = middleOf(rail, removal);
+  const middle = middleOf(rail, cut);
   const uniforms = {
     uWood: { value: palette.wood }, uHi: { value: palette.woodHi }, uLo: { value: palette.woodLo }, uGrain: { value: palette.woodGrain }, uDeep: { value: palette.woodDeep },
     uLong: { value: shared.long }, uEnd: { value: shared.end },
@@ -29,19 +30,18 @@ export function woodGroup(rail: Box, removal: Removal | null, field: Record<stri
     group.add(mesh);
     return mesh;
   };
-  add(blockGeometry(rail, removal), {});
-  if (removal) add(fieldGeometry(removal), { FIELD: '' });
-  const cap = add(capGeometry(rail, removal, middle), { CAP: '' });
+  add(blockGeometry(rail, cut), {});
+  if (cut) add(fieldGeometry(cut), { FIELD: '' });
+  const cap = add(capGeometry(rail, cut, middle), { CAP: '' });
   cap.name = 'cap';
   cap.visible = shared.section.value;
   return group;
 }
 
 /** The falls as the shaders read them: a texture, and how it is laid out. Empty where nothing is cut. */
-export function fieldUniforms(removal: Removal | null): Record<string, IUniform> {
-  if (!removal) return {};
-  const { grid, falls } = removal;
-  const { data, layers } = packFalls(falls, grid.columns, grid.rows);
+export function fieldUniforms(cut: CutField | null): Record<string, IUniform> {
+  if (!cut) return {};
+  const { grid, falls: { data, layers } } = cut;
   const texture = new DataTexture(data, grid.columns, grid.rows * layers, RGBAFormat, FloatType);
   texture.minFilter = texture.magFilter = NearestFilter;
   texture.needsUpdate = true;
@@ -49,18 +49,18 @@ export function fieldUniforms(removal: Removal | null): Record<string, IUniform>
 }
 
 /** Where the section is cut: along the middle of what is cut away, or of the rail. */
-export function middleOf(rail: Box, removal: Removal | null): number {
-  return removal ? middleRow(removal).y : (rail.y0 + rail.y1) / 2;
+export function middleOf(rail: Box, cut: CutField | null): number {
+  return cut ? middleRow(cut).y : (rail.y0 + rail.y1) / 2;
 }
 
 /** The places along the section where the wood's height may change; a crossing of -1 stays at the top. */
-export function middleLine(rail: Box, removal: Removal | null): { readonly x: number; readonly crossing: number }[] {
+export function middleLine(rail: Box, cut: CutField | null): { readonly x: number; readonly crossing: number }[] {
   const line = [{ x: rail.x0, crossing: -1 }];
-  if (removal) {
-    const { row } = middleRow(removal);
-    for (let c = 0; c < removal.grid.columns; c++) {
-      const crossing = row * removal.grid.columns + c;
-      line.push({ x: removal.places[crossing * 2] ?? 0, crossing });
+  if (cut) {
+    const { row } = middleRow(cut);
+    for (let c = 0; c < cut.grid.columns; c++) {
+      const crossing = row * cut.grid.columns + c;
+      line.push({ x: cut.position[crossing * 3] ?? 0, crossing });
     }
   }
   line.push({ x: rail.x1, crossing: -1 });
@@ -68,7 +68,7 @@ export function middleLine(rail: Box, removal: Removal | null): { readonly x: nu
 }
 
 /** The row of crossings along the middle of the cut. */
-function middleRow({ grid }: Removal): { readonly row: number; readonly y: number } {
+function middleRow({ grid }: CutField): { readonly row: number; readonly y: number } {
   const row = (grid.rows - 1) / 2;
   return { row, y: grid.ys[row] ?? 0 };
 }
@@ -83,46 +83,31 @@ function quads(faces: readonly (readonly [Corner, Corner, Corner, Corner])[]): B
 }
 
 /** Sides, ends and underside, and the top as a frame round the net. */
-function blockGeometry({ x0, x1, y0, y1, z0, z1 }: Box, removal: Removal | null): BufferGeometry {
+function blockGeometry({ x0, x1, y0, y1, z0, z1 }: Box, cut: CutField | null): BufferGeometry {
   const flat = (a: number, b: number, c: number, d: number) => [[a, c, z1], [b, c, z1], [b, d, z1], [a, d, z1]] as const;
   const upright = (ax: number, ay: number, bx: number, by: number) => [[ax, ay, z0], [bx, by, z0], [bx, by, z1], [ax, ay, z1]] as const;
   const faces: (readonly [Corner, Corner, Corner, Corner])[] = [
     upright(x0, y0, x1, y0), upright(x1, y0, x1, y1), upright(x1, y1, x0, y1), upright(x0, y1, x0, y0),
     [[x0, y0, z0], [x1, y0, z0], [x1, y1, z0], [x0, y1, z0]],
   ];
-  if (!removal) return quads([...faces, flat(x0, x1, y0, y1)]);
-  const { xs, ys, columns, rows } = removal.grid;
+  if (!cut) return quads([...faces, flat(x0, x1, y0, y1)]);
+  const { xs, ys, columns, rows } = cut.grid;
   const [a = x0, b = x1, c = y0, d = y1] = [xs[0], xs[columns - 1], ys[0], ys[rows - 1]];
   return quads([...faces, flat(x0, a, y0, y1), flat(b, x1, y0, y1), flat(a, b, y0, c), flat(a, b, d, y1)]);
 }
 
 /** The net; its heights come from the texture. */
-function fieldGeometry({ grid, places }: Removal): BufferGeometry {
-  const { columns, rows } = grid;
-  const position = new Float32Array(columns * rows * 3);
-  for (let v = 0; v < columns * rows; v++) {
-    position[v * 3] = places[v * 2] ?? 0;
-    position[v * 3 + 1] = places[v * 2 + 1] ?? 0;
-  }
-  const index = new Uint32Array((columns - 1) * (rows - 1) * 6);
-  let at = 0;
-  for (let r = 0; r < rows - 1; r++) {
-    for (let c = 0; c < columns - 1; c++) {
-      const v = r * columns + c;
-      index.set([v, v + 1, v + columns + 1, v, v + columns + 1, v + columns], at);
-      at += 6;
-    }
-  }
+function fieldGeometry({ position, index }: CutField): BufferGeometry {
   const geometry = new BufferGeometry();
-  geometry.setAttribute('position', new Float32BufferAttribute(position, 3));
-  geometry.setIndex(new Uint32BufferAttribute(index, 1));
+  geometry.setAttribute('position', new BufferAttribute(position, 3));
+  geometry.setIndex(new BufferAttribute(index, 1));
   return geometry;
 }
 
 /** The face along the middle of the cut: as high as the wood is at each crossing of the middle row. */
-function capGeometry(rail: Box, removal: Removal | null, y: number): BufferGeometry {
+function capGeometry(rail: Box, cut: CutField | null, y: number): BufferGeometry {
   const { z0, z1 } = rail;
-  const tops = middleLine(rail, removal);
+  const tops = middleLine(rail, cut);
   const position = tops.flatMap(({ x }) => [x, y, z1, x, y, z0]);
   const crossings = tops.flatMap(({ crossing }) => [crossing, -1]);
   const index = tops.slice(1).flatMap((_, i) => [0, 1, 3, 0, 3, 2].map((k) => i * 2 + k));

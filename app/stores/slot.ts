@@ -107,6 +107,8 @@ export const useSlotStore = defineStore('slot', () => {
     /** Of the last sizes that worked. Only `current` may be taken away. */
     request: computed(() => reading.value?.request ?? null),
     made,
+    /** How `made` is drawn, where the core has worked it out. */
+    ways: computed(() => reading.value?.ways ?? null),
     /** The core has been at work for long enough to say so, or could not be fetched. */
     late: computed(() => late.value), stopped: computed(() => stopped.value),
     current: computed(() => (sound.value && settled.value && made.value?.ok ? made.value : null)),
