@@ -73,8 +73,18 @@ export function rangeField(words: string, least: number, most: number, what: str
     .refine(([low, high]) => low <= high, { error: `Give the ${words} as least, then greatest.` });
 }
 
-/** A chip load band: units per tooth. Half an inch a tooth is beyond any cutter; it catches a feed typed in its place. */
-export const chipLoadField = (units: Units, words: string) => rangeField(words, byUnits(units, 0.0001, 0.002), byUnits(units, 0.5, 12), `${units} per tooth`);
+/** Units per tooth. Half an inch a tooth is beyond any cutter: a feed typed in its place is caught. */
+export const chipLoadFigure = (units: Units, words: string) => figureField(words, byUnits(units, 0.0001, 0.002), byUnits(units, 0.5, 12), `${units} per tooth`);
+
+/** A chip load band: a slot takes one only with some room in it. */
+export function chipLoadField(units: Units, words: string) {
+  return z
+    .tuple([chipLoadFigure(units, `least ${words}`), chipLoadFigure(units, `greatest ${words}`)], { error: wrong(words, 'Use two numbers, least then greatest.') })
+    .refine(([least, most]) => least < most, { error: ROOM });
+}
+
+/** Said where a band has no room in it. */
+export const ROOM = 'The greatest chip load is no more than the least. Give least, then greatest; around a single figure a tenth either way.';
 
 /** Longest name of a record: one line of a list and of a sheet. */
 const LONGEST_NAME = 60;

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { objectError } from '../measure/messages';
 import type { Units } from '../measure/units';
 import type { Wood, WoodKind } from '../wood/woods';
-import { choiceField, figureField, nameField, recordError, sizeField, wrong, yesNoField } from './fields';
+import { ROOM, choiceField, chipLoadFigure, nameField, recordError, sizeField, wrong, yesNoField } from './fields';
 
 /** What a shop's own wood is: it decides how deep a pass may be. */
 export const OWN_WOOD_KINDS = ['hardwood', 'softwood', 'sheet'] as const;
@@ -25,19 +25,15 @@ export const SHEET_FACTS: Readonly<Record<Extract<WoodKind, 'plywood' | 'mdf'>, 
 
 /** Diameters of the chip load table: those of router bits. */
 const DIAMETER = { least: { in: 0.01, mm: 0.25 }, most: { in: 4, mm: 100 } } as const;
-/** A chip load beyond these is another figure typed in its place: 0.5 in, 12 mm per tooth. */
-const CHIP = { in: [0.0001, 0.5], mm: [0.002, 12] } as const;
 const MOST_ROWS = 30; // more diameters than a shop owns
 
 function chipLoadIn(units: Units) {
-  const [least, most] = CHIP[units];
-  const load = (words: string) => figureField(words, least, most, `${units} per tooth`);
   return z.strictObject({
     diameter: sizeField(units, 'bit diameter', DIAMETER),
-    least: load('least chip load'),
-    most: load('greatest chip load'),
+    least: chipLoadFigure(units, 'least chip load'),
+    most: chipLoadFigure(units, 'greatest chip load'),
   }, { error: objectError('each chip load as an object with diameter, least and most') })
-    .refine((row) => row.least <= row.most, { path: ['most'], error: 'The greatest chip load is less than the least. Give least, then greatest.' });
+    .refine((row) => row.least < row.most, { path: ['most'], error: ROOM });
 }
 
 function woodIn<const U extends Units>(units: U) {

@@ -20,6 +20,7 @@ const REFUSALS: readonly Refusal[] = [
   { rule: 'an up-cut length of another kind', path: 'upcutLength', bad: { upcutLength: 0.1875 }, names: ['3/16 in', 'compression', 'leave it out'], good: { upcutLength: null } },
   { rule: 'up-cut all along', path: 'upcutLength', bad: { ...COMPRESSION, upcutLength: '3/4' }, names: ['3/4 in', 'less than'], good: COMPRESSION },
   { rule: 'chip loads the wrong way round', path: 'chipLoadRange', bad: { chipLoadRange: [0.006, 0.004] }, names: ['least, then greatest'], good: { chipLoadRange: [0.004, 0.006] } },
+  { rule: 'one chip load twice', path: 'chipLoadRange', bad: { chipLoadRange: [0.004, 0.004] }, names: ['no more than the least', 'a tenth either way'], good: { chipLoadRange: [0.0036, 0.0044] } },
   { rule: 'a feed in place of a chip load', path: 'chipLoadRange.1', bad: { chipLoadRange: [0.004, 100] }, names: ['greatest chip load', '100', '0.5'], good: { chipLoadRange: null } },
   { rule: 'a top speed of nothing', path: 'topSpeed', bad: { topSpeed: 0 }, names: ['top speed', '0', 'rev/min'], good: { topSpeed: 24000 } },
   { rule: 'another unit', path: 'units', bad: { units: 'cm' }, names: ['unit of length', '"cm"'], good: {} },
