@@ -6,8 +6,8 @@ import { wrong } from './fields';
 /** Most rails of one drawing: above any job of a small shop. */
 const MOST_RAILS = 500;
 
-/** The drawing as a link writes it (app/utils/link): figures as they were typed, which no request keeps. */
-const draft = z.string({ error: wrong('drawing', 'Send it as its link writes it.') }).regex(/^1\.[\w-]{1,8190}$/, { error: 'The drawing cannot be read. Send it as its link writes it.' });
+/** The drawing as a link writes it (app/utils/link): figures as they were typed, which no request keeps. Empty: the page draws it from the request. */
+const draft = z.string({ error: wrong('drawing', 'Send it as its link writes it.') }).regex(/^(?:1\.[\w-]{1,8190})?$/, { error: 'The drawing cannot be read. Send it as its link writes it.' }).default('');
 
 /** A drawing's request: judged as for a program, kept as it was sent. */
 const request = z.unknown().transform((raw, context): { readonly input: SlotRequestInput; readonly slot: SlotRequest } => {
