@@ -29,6 +29,11 @@ export function onMachine(rail: SlotRequestInput, { machine, holding, bit, wood 
   const from = (own: Units) => (value: number) => convertLength(value, own, units);
   const ofMachine = from(machine.units);
   const ofBit = from(bit.units);
+  const same = machine.units === units;
+  // A conversion may miss by a few units in the last binary place: what fits exactly has to go on fitting.
+  const reach = (value: number) => (same ? value : Number(ofMachine(value).toFixed(9)));
+  // Feeds are written with one decimal; rounded down, so that none passes what the machine can do.
+  const atMost = (value: number) => (same ? value : Math.floor(ofMachine(value) * 10 + 1e-6) / 10);
   const { workArea, topFeed, spindleRange, heavy, options } = machine;
   const [slowest, fastest] = spindleRange;
   return {
@@ -47,8 +52,8 @@ export function onMachine(rail: SlotRequestInput, { machine, holding, bit, wood 
     spindle: machine.spindle,
     spindleSpeed: rail.spindleSpeed ?? Math.max(slowest, Math.min(USUAL_SPEED, fastest, bit.topSpeed ?? Infinity)),
     machine: {
-      travel: { x: ofMachine(workArea.x), y: ofMachine(workArea.y), z: ofMachine(workArea.z) },
-      topFeed: ofMachine(Math.min(topFeed.x, topFeed.y)), // a lap runs along both; Z is held against the plunge feed
+      travel: { x: reach(workArea.x), y: reach(workArea.y), z: reach(workArea.z) },
+      topFeed: atMost(Math.min(topFeed.x, topFeed.y)), // a lap runs along both; Z is held against the plunge feed
       ...(machine.acceleration === null ? {} : { acceleration: ofMachine(machine.acceleration) }),
       spindleRange: [slowest, fastest],
       heavy,

@@ -5,6 +5,7 @@ import { bitCorrection, effectiveDiameter } from '#shared/shop/bitCorrection';
 import { slotRequestSchema } from '#shared/slot/request';
 import { measureSlot } from '../measureSlot';
 import { RAIL_A } from '../slot/asking';
+import type { JudgedSpec } from '../../support/soundCut/types';
 
 const QUARTER = { units: 'in', diameter: 0.25 } as const;
 /** A slot 3/8 wide whose program took the bit for 1/4 in. */
@@ -26,7 +27,7 @@ describe('the effective diameter', () => {
    * The program of a slot is cut with a bit of another diameter: the judge's interpreter (tests/support, without
    * shared/) says where the centre goes, and the walls stand half that bit beyond.
    */
-  it.each([
+  it.each<[string, Partial<JudgedSpec>]>([
     ['two walls', { width: 0.375 }], ['two walls, far apart', { width: 0.75, railWidth: 2.25 }], ['one bit', { width: 0.252 }],
     ['a finish lap', { width: 0.375, finishAllowance: 0.02 }], ['round ends', { width: 0.5, railWidth: 1.5, ends: 'round' }],
   ])('is found again from what a real program cuts: %s', (_, more) => {

@@ -79,7 +79,7 @@ describe('records in other units', () => {
     const request = onMachine(RAIL, shop({ machine: METRIC_TABLE, bit: { ...METRIC_BIT, chipLoadRange: [0.1, 0.15] } }));
     expect(request).toMatchObject({
       units: 'in', bitDiameter: 6.35 / 25.4, stickout: 31.75 / 25.4, clampHeight: 12.7 / 25.4, chipLoadRange: [0.1 / 25.4, 0.15 / 25.4],
-      machine: { travel: { x: 812.8 / 25.4, z: 101.6 / 25.4 }, topFeed: 5080 / 25.4, acceleration: 508 / 25.4 }, options: { programUnits: 'mm' },
+      machine: { travel: { x: 32, z: 4 }, topFeed: 200, acceleration: 508 / 25.4 }, options: { programUnits: 'mm' },
     });
   });
 
@@ -102,6 +102,17 @@ describe('records in other units', () => {
     fc.assert(fc.property(fc.double({ min: 0.2, max: 0.3, noNaN: true }), (diameter) => {
       expect(onMachine(RAIL, shop({ bit: { ...QUARTER, diameter } })).bitDiameter).toBe(diameter);
     }), { seed: 9 });
+  });
+
+  it('let through what fits to the last hair, and no feed beyond the machine', () => {
+    fc.assert(fc.property(fc.integer({ min: 40, max: 4000 }), fc.integer({ min: 400, max: 20000 }), (tenths, feed) => {
+      const inches = tenths / 100;
+      const x = Number((inches * 25.4).toFixed(4));
+      const limits = onMachine(RAIL, shop({ machine: { ...METRIC_TABLE, workArea: { x: Math.max(x, 12), y: 800, z: 100 }, topFeed: { x: feed, y: feed, z: 1000 } } })).machine;
+      if (x >= 12) expect(limits?.travel?.x).toBe(inches);
+      expect((limits?.topFeed ?? Infinity) * 25.4).toBeLessThanOrEqual(feed + 1e-4);
+      expect((limits?.topFeed ?? 0) * 25.4).toBeGreaterThan(feed - 2.54 - 1e-9);
+    }), { seed: 10 });
   });
 
   it('never ask for a chord that the drawing is too fine for', () => {
