@@ -23,9 +23,10 @@ export default defineNuxtConfig({
 
   app: { head: { htmlAttrs: { lang: 'en' } } },
 
-  // No page needs an account yet, so no visitor is given a session cookie by looking at one.
-  auth: { loadStrategy: 'none' },
-  runtimeConfig: { session: { name: 'tallyrail' } },
+  // Our own /api/account says who is signed in; a visitor is given no session cookie by looking at a page.
+  auth: { loadStrategy: 'none', webAuthn: true },
+  // Whether the cookie may travel without https is decided for each session (server/access/person.ts).
+  runtimeConfig: { session: { name: 'tallyrail', maxAge: 60 * 60 * 24 * 30, cookie: { sameSite: 'lax', httpOnly: true, secure: false } } },
 
   // TresJS draws its own elements; only its canvas is a component.
   vue: {

@@ -1,4 +1,5 @@
 import { spawn } from 'node:child_process';
+import { readFileSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { join } from 'node:path';
 import { buildIfChanged } from './setup/build.mjs';
@@ -7,6 +8,11 @@ import { ROOT, Stop, main, say } from './setup/run.mjs';
 
 const HOST = '127.0.0.1'; // the demo is for the person at this computer
 const PORTS_TRIED = 20;
+const DATA = process.env.TALLYRAIL_DATA || join(ROOT, '.data', 'demo');
+const ROLE_WORDS = { owner: 'Owner', hand: 'Shop hand', customer: 'Customer' };
+
+/** Made by the server when it first filled this folder. */
+const demoSignIns = () => JSON.parse(readFileSync(join(DATA, 'demo-sign-ins.json'), 'utf8'));
 
 /** Whether a port can be listened on. */
 function isFree(port) {
@@ -56,7 +62,8 @@ await main(async () => {
       NITRO_HOST: HOST,
       NITRO_PORT: String(port),
       TALLYRAIL_DEMO: '1',
-      TALLYRAIL_DATA: process.env.TALLYRAIL_DATA || join(ROOT, '.data'),
+      TALLYRAIL_DATA: DATA,
+      TALLYRAIL_ORIGIN: address,
     },
   });
   const ended = new Promise((resolve, reject) => {
@@ -66,7 +73,7 @@ await main(async () => {
   for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => server.kill(signal));
   if (await untilItAnswers(address, server)) {
     console.log(`\nTallyrail is at ${address}`);
-    console.log('No sign-in yet: everything here works without an account.');
+    for (const { role, email, password } of demoSignIns()) console.log(`  ${ROLE_WORDS[role]}: ${email}  ${password}`);
     console.log('Stop it with Ctrl+C.\n');
   }
   return ended;

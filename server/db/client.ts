@@ -20,6 +20,20 @@ export function openDatabase(folder: string, migrations: readonly MigrationMeta[
 export type ShopDatabase = ReturnType<typeof openDatabase>['database'];
 
 /**
+ * Runs some writes, all of them or none, in their order. What a later one needs to know is decided before: that is
+ * what a driver whose database is elsewhere can do as well.
+ */
+export async function allOrNothing(database: ShopDatabase, writes: readonly { readonly run: () => unknown }[]): Promise<void> {
+  database.transaction(() => writes.forEach((write) => write.run()), { behavior: 'immediate' });
+}
+
+/** Whether an error is the database's refusal of a second row where there may be one. */
+export function isTaken(error: unknown): boolean {
+  const cause = error instanceof Error && error.cause instanceof Error ? error.cause : error;
+  return cause instanceof Error && 'code' in cause && (cause.code === 'SQLITE_CONSTRAINT_UNIQUE' || cause.code === 'SQLITE_CONSTRAINT_PRIMARYKEY');
+}
+
+/**
  * Applies what is new, all of it or none, and keeps account in the table Drizzle's own migrator uses. That one reads
  * a folder, and a built server has none: its migrations are part of it (nuxt.config.ts).
  */

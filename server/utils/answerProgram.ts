@@ -6,7 +6,7 @@ import { type FieldError, problem } from './problem';
 type GoodProgram = Extract<MadeProgram, { readonly ok: true }>;
 
 /** The program as a file to save; its name has only letters, digits, dots, hyphens and underscores. */
-export function programFile(event: H3Event, made: GoodProgram): string {
+export function programFile(event: H3Event, made: Pick<GoodProgram, 'mark' | 'fileName' | 'program'>): string {
   setResponseHeaders(event, {
     'content-type': 'text/plain; charset=utf-8',
     'content-disposition': `attachment; filename="${made.fileName.replaceAll(/[^\w.-]/g, '_')}"`,

@@ -16,7 +16,7 @@ export async function readBodyAs<Schema extends z.ZodType>(event: H3Event, schem
   if (result.success) return result.data;
   const errors = result.error.issues.flatMap(fieldErrors);
   const count = errors.length === 1 ? 'One thing needs' : `${errors.length} things need`;
-  throw problem(422, `${count} changing before a program can be made.`, { errors: errors.slice(0, MOST_ERRORS) });
+  throw problem(422, `${count} changing.`, { errors: errors.slice(0, MOST_ERRORS) });
 }
 
 function expectJson({ node: { req: { headers } } }: H3Event): void {
@@ -41,7 +41,7 @@ function parseJson(text: string): unknown {
 }
 
 /** An unknown key is named by its own path, like any other field. */
-function fieldErrors(issue: z.core.$ZodIssue): FieldError[] {
+export function fieldErrors(issue: z.core.$ZodIssue): FieldError[] {
   const path = issue.path.map(String);
   if (issue.code !== 'unrecognized_keys') return [{ path: path.join('.'), message: issue.message }];
   return issue.keys.map((key) => {

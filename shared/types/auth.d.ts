@@ -1,9 +1,11 @@
 import type {} from '#auth-utils';
 
 declare module '#auth-utils' {
-  /** Who is signed in. Accounts come with the shop's records: until then nobody is, and nothing is known of them. */
+  /** Who a session is for; everything else about them is looked up, so that nothing sealed can be out of date. */
   interface User {
-    readonly id?: never;
+    readonly id: string;
+    /** The epoch of the person's sessions when this one began. */
+    readonly epoch: number;
   }
 }
 

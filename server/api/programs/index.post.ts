@@ -8,7 +8,7 @@ import { slotRequestSchema } from '#shared/slot/request';
 
 /** A slot spec in, a program that has been read back out. */
 export default defineEventHandler(async (event) => {
-  await limitRate(event);
+  await limitRate(event, 'programs');
   const type = chooseType(event, ['application/json', 'text/plain']);
   const request = await readBodyAs(event, slotRequestSchema);
   const made = makeProgram(request);
