@@ -34,8 +34,14 @@ export function programsIn(database: ShopDatabase) {
   };
 }
 
-let shop: ReturnType<typeof programsIn> | undefined;
-const ours = () => (shop ??= programsIn(useDatabase()));
+let prepared: { readonly database: ShopDatabase; readonly programs: ReturnType<typeof programsIn> } | undefined;
+
+/** The statements of the database that stands: a restored one is another, and has its own. */
+function ours() {
+  const database = useDatabase();
+  if (prepared?.database !== database) prepared = { database, programs: programsIn(database) };
+  return prepared.programs;
+}
 
 export const keepProgram = (made: GoodProgram) => ours().keep(made);
 export const findByMark = (mark: string) => ours().findByMark(mark);

@@ -1,0 +1,9 @@
+import { Readable } from 'node:stream';
+import { callerOf } from '#server/access/person';
+import { shopZip } from '#server/services/shopExport';
+
+/** The whole shop as a zip of CSV lists and program files. */
+export default defineEventHandler((event) => {
+  setResponseHeaders(event, { 'content-type': 'application/zip', 'content-disposition': 'attachment; filename="tallyrail-shop.zip"' });
+  return sendStream(event, Readable.from(shopZip(callerOf(event).shopId)));
+});
