@@ -21,7 +21,13 @@ export function usePlayback(source: MaybeRefOrGetter<Timeline | null>) {
   const playing = ref(false);
   const speed = shallowRef<PlaybackSpeed>(5);
 
-  const step = computed(() => (timeline.value ? stepAt(timeline.value, time.value) : -1));
+  /** A step that was asked for by itself: of several at one moment, such as a mode and the move after it, it stays the one. */
+  const asked = shallowRef(-1);
+  const step = computed(() => {
+    if (!timeline.value) return -1;
+    const start = timeline.value.start[asked.value];
+    return start !== undefined && start === time.value ? asked.value : stepAt(timeline.value, time.value);
+  });
   const line = computed(() => timeline.value?.steps[step.value]?.at.line ?? 0);
   /** Counted from 1; 0 before the first. */
   const pass = computed(() => passAt(passes.value, time.value));
@@ -60,6 +66,7 @@ export function usePlayback(source: MaybeRefOrGetter<Timeline | null>) {
   }
 
   function seek(to: number) {
+    asked.value = -1;
     time.value = Math.min(seconds.value, Math.max(0, Number.isFinite(to) ? to : 0));
   }
 
@@ -77,13 +84,14 @@ export function usePlayback(source: MaybeRefOrGetter<Timeline | null>) {
   function seekStep(index: number) {
     pause();
     seek(timeline.value?.start[index] ?? 0);
+    asked.value = index;
   }
 
   const nextPass = () => seek(passStarts.value.find((start) => start > time.value + SAME) ?? seconds.value);
   const previousPass = () => seek(passStarts.value.findLast((start) => start < time.value - SAME) ?? 0);
 
   // A new program keeps the place as far as it goes.
-  watch(seconds, (whole) => seek(Math.min(time.value, whole)), { flush: 'sync' });
+  watch(timeline, () => seek(time.value), { flush: 'sync' });
   onScopeDispose(() => typeof window !== 'undefined' && pause());
 
   return {

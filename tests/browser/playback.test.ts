@@ -49,6 +49,34 @@ describe('playback', () => {
     await context.close();
   });
 
+  test('a block that takes no time can be chosen too, and Up from the last block goes on up', async () => {
+    const { page, context } = await openPage(browser, url);
+    await page.locator('.lines').scrollIntoViewIfNeeded();
+    await page.getByRole('slider', { name: 'Time in the program' }).waitFor();
+    const current = page.locator('[role="option"][aria-selected="true"]');
+    await page.locator('.lines').focus();
+    await page.keyboard.press('End');
+    expect(await current.textContent()).toMatch(/^\d+M30/);
+    await page.keyboard.press('ArrowUp');
+    expect(await current.textContent()).toMatch(/^\d+M5/);
+    await page.keyboard.press('ArrowUp');
+    expect(await current.textContent()).toMatch(/^\d+G0 Z/);
+    await page.keyboard.press('Home');
+    const first = await current.textContent();
+    await page.keyboard.press('ArrowDown');
+    expect(await current.textContent()).not.toBe(first);
+    await context.close();
+  });
+
+  test('on a tablet and a phone the text has its place beside the cut', async () => {
+    for (const viewport of [{ width: 1024, height: 768 }, { width: 390, height: 844 }]) {
+      const { page, context } = await openPage(browser, url, { viewport });
+      const text = await page.locator('.lines').boundingBox();
+      expect(text?.height).toBeGreaterThan(250);
+      await context.close();
+    }
+  });
+
   test('without WebGL the cut plays from above', async () => {
     const plain = await launch({ webgl: false });
     const { page } = await openPage(plain, url);
