@@ -3,18 +3,28 @@ import { CanvasTexture, LinearMipmapLinearFilter, NoColorSpace, RepeatWrapping }
 /** A pattern that is the same every time it is drawn: plain sine waves whose periods share no factor. */
 const wander = (t: number, seed: number): number => Math.sin(t * 2.1 + seed) * 0.5 + Math.sin(t * 5.3 + seed * 2.7) * 0.3 + Math.sin(t * 11.9 + seed * 1.3) * 0.2;
 
-function sheet(width: number, height: number, draw: (context: CanvasRenderingContext2D) => void): CanvasTexture {
+/** Drawn once for the page: every rail has the same grain, and every program a picture of its own. */
+const drawn = new Map<string, HTMLCanvasElement>();
+
+function canvasOf(name: string, width: number, height: number, draw: (context: CanvasRenderingContext2D) => void): HTMLCanvasElement {
+  const ready = drawn.get(name);
+  if (ready) return ready;
   const canvas = document.createElement('canvas');
   canvas.width = width;
   canvas.height = height;
-  const context = canvas.getContext('2d');
+  const context = canvas.getContext('2d', { willReadFrequently: true }); // a texture is read from it: kept in memory, not on the card
   if (context) {
     context.fillStyle = '#000';
     context.fillRect(0, 0, width, height);
     context.strokeStyle = '#fff';
     draw(context);
   }
-  const texture = new CanvasTexture(canvas);
+  drawn.set(name, canvas);
+  return canvas;
+}
+
+function sheet(name: string, width: number, height: number, draw: (context: CanvasRenderingContext2D) => void): CanvasTexture {
+  const texture = new CanvasTexture(canvasOf(name, width, height, draw));
   texture.colorSpace = NoColorSpace; // a mask, not a colour
   texture.wrapS = texture.wrapT = RepeatWrapping;
   texture.minFilter = LinearMipmapLinearFilter;
@@ -25,7 +35,7 @@ function sheet(width: number, height: number, draw: (context: CanvasRenderingCon
 /** Lines of grain that run along the rail, eight widths to a sheet, with the short dashes of open pores. */
 export function longGrain(): CanvasTexture {
   const [width, height] = [2048, 256];
-  return sheet(width, height, (context) => {
+  return sheet('long', width, height, (context) => {
     const turn = (2 * Math.PI) / width; // whole turns, so that the sheet joins itself
     for (let line = 0; line < 15; line++) {
       const y = ((line + 0.5) / 15) * height + wander(line, 1) * 5;
@@ -52,7 +62,7 @@ export function longGrain(): CanvasTexture {
 /** Growth rings about a heart below the rail, as the section drawing shows them. */
 export function endGrain(): CanvasTexture {
   const side = 512;
-  return sheet(side, side, (context) => {
+  return sheet('end', side, side, (context) => {
     for (let ring = 0; ring < 26; ring++) {
       context.globalAlpha = 0.45 + 0.35 * wander(ring, 2);
       context.lineWidth = 2 + Math.abs(wander(ring, 6)) * 3;
