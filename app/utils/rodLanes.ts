@@ -1,6 +1,7 @@
 import type { Pass } from '#shared/playback/index';
 import type { SlotSpec } from '#shared/slot/spec';
 import { type Timeline, isMotion, newMoment, positionAt, stepAt } from '#shared/time/index';
+import { onceOver } from './onceOver';
 
 /** The bit's way through one pass, seen from above: moments and places on the rail, from its front left corner. */
 export interface Way {
@@ -115,6 +116,8 @@ export interface Track {
   readonly py: readonly number[];
   readonly far: readonly number[];
   readonly path: string;
+  /** The same with every stretch once: dashes of a way gone twice would fill each other's gaps. */
+  readonly once: string;
 }
 
 /** Draws every lane's way to the same width across, front edge below, so that going out and coming back lie apart. */
@@ -127,7 +130,7 @@ export function trackOf(lane: Lane, box: TrackBox): Track {
   const far = [0];
   for (let i = 1; i < px.length; i++) far.push((far[i - 1] ?? 0) + Math.hypot((px[i] ?? 0) - (px[i - 1] ?? 0), (py[i] ?? 0) - (py[i - 1] ?? 0)));
   const path = px.map((one, i) => `${i === 0 ? 'M' : 'L'}${one.toFixed(1)} ${(py[i] ?? 0).toFixed(1)}`).join('');
-  return { lane, px, py, far, path };
+  return { lane, px, py, far, path, once: onceOver(px, py) };
 }
 
 /** Which point of the way was last reached at a moment. */
