@@ -37,6 +37,7 @@ export interface PlanView {
 }
 
 const LEAST_HEIGHT = 72; // px: below this the groove of a 1 1/4 rail is too thin to read
+const BROKEN_HEIGHT = LEAST_HEIGHT * 1.25; // px: a rail in pieces stands well over what can just be read
 const MOST_HEIGHT = 180; // px: a short wide rail must not push the rest off the sheet
 const BREAK_GAP = 20; // px of bare sheet between two pieces
 
@@ -59,15 +60,17 @@ function outline(left: number, right: number, top: number, bottom: number, cut: 
 /**
  * Lays the rail out in the room there is: whole where it is then thick enough to read, else in true-scale pieces with
  * the wood break between them, so that both ends and their stop margins stay readable.
+ *
+ * @param room `tall`: how high a rail in pieces is drawn, where there is more room than it needs.
  */
-export function planView(sizes: PlanSizes, room: { readonly left: number; readonly right: number; readonly top: number }): PlanView {
+export function planView(sizes: PlanSizes, room: { readonly left: number; readonly right: number; readonly top: number; readonly tall?: number }): PlanView {
   const { railLength, railWidth, stopMargin } = sizes;
   const span = room.right - room.left;
   const whole = Math.min(span / railLength, MOST_HEIGHT / railWidth);
   const count = span < 480 ? 2 : 3;
   const shown = span - BREAK_GAP * (count - 1);
   // An end piece must show its stop margin and half as much groove again.
-  const fit = Math.min(LEAST_HEIGHT * 1.25 / railWidth, shown / count / (1.6 * stopMargin));
+  const fit = Math.min((room.tall ?? BROKEN_HEIGHT) / railWidth, shown / count / (1.6 * stopMargin));
   const broken = whole * railWidth < LEAST_HEIGHT && fit > whole * 1.15;
   const scale = broken ? fit : whole;
   const height = scale * railWidth;

@@ -79,6 +79,40 @@ describe('the storey rod', () => {
     await context.close();
   });
 
+  test('on a tablet it stays in sight, and what has the focus is never under it or under the download', async () => {
+    const { page, context } = await openPage(browser, url, { viewport: { width: 1024, height: 768 } });
+    await page.evaluate(() => window.scrollTo(0, document.body.scrollHeight));
+    const [top, bar] = [await page.locator('.rod-place').boundingBox(), await page.locator('[data-download]').boundingBox()];
+    if (!top || !bar) expect.fail('the rod or the download is not drawn');
+    expect(top.y).toBe(0);
+    expect(bar.y + bar.height).toBeLessThanOrEqual(768);
+    const rows = page.locator('#readback button.where');
+    for (let i = (await rows.count()) - 1; i >= 0; i--) {
+      await rows.nth(i).focus();
+      const box = await rows.nth(i).boundingBox();
+      expect(box?.y, `row ${i}`).toBeGreaterThanOrEqual(top.height);
+      expect((box?.y ?? 0) + (box?.height ?? 0), `row ${i}`).toBeLessThan(bar.y);
+    }
+    await context.close();
+  });
+
+  test('rod and drawing keep their place and width from the first paint on', async () => {
+    for (const viewport of [{ width: 1440, height: 1000 }, { width: 820, height: 1180 }, { width: 390, height: 844 }]) {
+      const plain = await browser.newContext({ viewport, javaScriptEnabled: false });
+      const [before, { page, context }] = [await plain.newPage(), await openPage(browser, url, { viewport })];
+      await before.goto(url);
+      await page.waitForTimeout(1000); // both have their fonts, which move lines by themselves
+      for (const part of ['.rod .inner svg', '.plan', '.section', '[data-size="railLength"]', '[data-size="railThickness"]']) {
+        const [first, then] = [await before.locator(part).first().boundingBox(), await page.locator(part).first().boundingBox()];
+        if (!first || !then) expect.fail(`${part} is not drawn`);
+        // A box is as wide as its face; the parts themselves stand where they stood.
+        for (const side of ['x', 'y', 'width', 'height'] as const) expect(Math.abs(first[side] - then[side]), `${part} ${side} at ${viewport.width}`).toBeLessThan(8);
+      }
+      await context.close();
+      await plain.close();
+    }
+  });
+
   test('without a program there is nothing to scrub', async () => {
     const { page, context } = await openPage(browser, url);
     await type(page, 'bitDiameter', '1/2');
