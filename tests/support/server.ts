@@ -20,9 +20,15 @@ export interface RunningServer {
   readonly stop: () => Promise<void>;
 }
 
-/** Starts the built server on a free port with an empty data folder, from a folder that is not the project's. */
-export async function startServer(env: Readonly<Record<string, string>> = {}): Promise<RunningServer> {
-  const folder = mkdtempSync(join(tmpdir(), 'tallyrail-data-'));
+export const newDataFolder = (): string => mkdtempSync(join(tmpdir(), 'tallyrail-data-'));
+
+/**
+ * Starts the built server on a free port, from a folder that is not the project's.
+ *
+ * @param kept a data folder that outlives the server; without one it gets an empty folder of its own.
+ */
+export async function startServer(env: Readonly<Record<string, string>> = {}, kept?: string): Promise<RunningServer> {
+  const folder = kept ?? newDataFolder();
   const server = spawn(process.execPath, [ENTRY], {
     cwd: folder,
     stdio: ['ignore', 'pipe', 'pipe'],
@@ -35,7 +41,7 @@ export async function startServer(env: Readonly<Record<string, string>> = {}): P
   const stop = async () => {
     server.kill('SIGTERM');
     await ended;
-    rmSync(folder, { recursive: true, force: true });
+    if (kept === undefined) rmSync(folder, { recursive: true, force: true });
   };
   return { url, folder, process: server, complaints: () => complaints, stop };
 }
