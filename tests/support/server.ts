@@ -38,6 +38,7 @@ export async function startServer(env: Readonly<Record<string, string>> = {}, ke
   server.stderr.setEncoding('utf8').on('data', (text: string) => (complaints += text));
   const ended = new Promise<void>((resolve) => server.once('exit', () => resolve()));
   const url = await addressOf(server, () => complaints);
+  await (await fetch(`${url}/api/account`)).arrayBuffer(); // it listens before the demo is filled, and answers after
   const stop = async () => {
     server.kill('SIGTERM');
     await ended;
