@@ -1,4 +1,4 @@
-import { and, asc, count, desc, eq, ne } from 'drizzle-orm';
+import { and, asc, count, desc, eq, gt, ne } from 'drizzle-orm';
 import type { z } from 'zod';
 import type { cutSchema } from '#shared/shop/cut';
 import type { ListQuery } from '#shared/shop/list';
@@ -70,9 +70,9 @@ export async function cutsOfRail(shopId: string, railId: string) {
   return await selectCuts().where(and(eq(cuts.shopId, shopId), eq(cuts.railId, railId))).orderBy(desc(cuts.cutAt)).limit(50);
 }
 
-/** First-off measurements made with a bit, with what each was drawn and programmed as: what a correction is worked out from. */
-export async function firstOffsOf(shopId: string, bitId: string) {
+/** First-off measurements made with a bit since it was put in (null: ever), with what each was drawn and programmed as: what a correction is worked out from. */
+export async function firstOffsOf(shopId: string, bitId: string, since: Date | null) {
   return await useDatabase().select({ id: cuts.id, cutAt: cuts.cutAt, widths: cuts.widths, spec: railPrograms.spec, mark: railPrograms.mark })
     .from(cuts).innerJoin(railPrograms, eq(railPrograms.id, cuts.programId))
-    .where(and(eq(cuts.shopId, shopId), eq(cuts.bitId, bitId), ne(cuts.widths, []))).orderBy(asc(cuts.cutAt));
+    .where(and(eq(cuts.shopId, shopId), eq(cuts.bitId, bitId), ne(cuts.widths, []), since ? gt(cuts.cutAt, since) : undefined)).orderBy(asc(cuts.cutAt));
 }

@@ -1,5 +1,5 @@
 import { foundIn } from '#server/access/found';
-import { shopBits } from '#server/services/records';
+import { findBit } from '#server/services/bits';
 
-/** One bit of the shop. */
-export default defineEventHandler((event) => foundIn(event, shopBits.find));
+/** One bit of the shop, with what it was found to cut and how long it has cut. */
+export default defineEventHandler((event) => foundIn(event, findBit));
