@@ -42,6 +42,7 @@ const COOKIE = { sameSite: 'lax', httpOnly: true } as const;
 /** Begins a session, under a new id: nothing of an earlier one is carried over. */
 export async function beginSession(event: H3Event, person: Pick<Person, 'id' | 'epoch'>): Promise<void> {
   await clearUserSession(event);
+  delete event.node.req.headers.cookie; // else the session that is begun would be the one that came
   const secure = getRequestProtocol(event, { xForwardedProto: settings.TALLYRAIL_TRUST_PROXY }) === 'https';
   await setUserSession(event, { user: { id: person.id, epoch: person.epoch } }, { cookie: { ...COOKIE, secure } });
 }
