@@ -2,9 +2,10 @@ import { and, asc, eq, lte } from 'drizzle-orm';
 import { mails } from '../db/schema';
 import { useDatabase } from '../db/shop';
 import { newId } from '../utils/newId';
+import { settings } from '../utils/settings';
 import type { Letter } from './letters';
 
-/** Minutes until the next try after each that failed; after the last the mail is given up and stays to be seen. */
+/** Pauses until the next try after each that failed, in units of the first; after the last the mail is given up and stays to be seen. */
 const PAUSES = [1, 5, 15, 60, 240, 720, 1440] as const;
 
 /** The write that queues a letter: it goes with whatever it tells of, all or nothing. */
@@ -26,6 +27,6 @@ export async function markSent(mail: QueuedMail): Promise<void> {
 
 export async function markRefused(mail: QueuedMail, refusal: string): Promise<void> {
   const pause = PAUSES[mail.attempts];
-  const nextAt = pause === undefined ? null : new Date(Date.now() + pause * 60_000);
+  const nextAt = pause === undefined ? null : new Date(Date.now() + pause * settings.TALLYRAIL_MAIL_PAUSE * 1000);
   await useDatabase().update(mails).set({ attempts: mail.attempts + 1, nextAt, refusal: refusal.slice(0, 500) }).where(eq(mails.id, mail.id));
 }
