@@ -39,13 +39,4 @@ export function verdictOf(readback: Readback): string {
 export const cautionsOf = (readback: Readback): readonly Finding[] => readback.findings.filter(({ severity }) => severity === 'caution');
 export const differing = (readback: Readback): readonly Finding[] => readback.findings.filter(({ severity }) => severity === 'disagrees');
 
-/** Said wherever the work can hurt someone (PRODUCT, Cautions). */
-export const ROUTER_CAUTIONS = [
-  'Eye and ear protection on.',
-  'Dust extraction running, a respirator on.',
-  'No gloves or loose sleeves near the cutter.',
-  'Clamps clear of the path.',
-  'First run in air, bit lifted above the clamps.',
-  'Hand on the stop for the first pass.',
-] as const;
-export const LAST_WORD = "The machine's manual, the bit maker's limits and your local rules come first.";
+export { LAST_WORD, ROUTER_CAUTIONS } from '#shared/shop/cautions';
