@@ -66,7 +66,7 @@ export function piecesOf(text: string): Piece[] {
   });
 }
 
-const SMALL = 0.68; // of the text's size: a fraction's numbers
+const SMALL = 0.74; // of the text's size: a fraction's numbers
 
 /** Writes a text with its top at `y` and gives where the next line's top would be. Fractions stand as fractions. */
 export function write(doc: Doc, text: string, x: number, y: number, { font = 'text', size = 9.5, width, align = 'left' }: Written = {}): number {
@@ -98,9 +98,9 @@ export function write(doc: Doc, text: string, x: number, y: number, { font = 'te
     for (const { text: head, fraction, after } of line) {
       put(head);
       if (fraction) {
-        put(fraction[0], -0.04, SMALL);
-        put('/', 0.14, SMALL);
-        put(fraction[1], 0.28, SMALL);
+        put(fraction[0], -0.06, SMALL);
+        put('/', 0.13, SMALL);
+        put(fraction[1], 0.3, SMALL);
       }
       put(after);
       at += gap;

@@ -55,7 +55,7 @@ function zeroDisc(doc: Doc, x: number, y: number, r: number): void {
 /** The rail from above, whole and to proportion, with its sizes; gives where the next line may stand. */
 export function drawPlan(doc: Doc, spec: SlotSpec, top: number): number {
   const long = railLength(spec);
-  const [left, right] = [MARGIN + 8, doc.page.width - MARGIN - 8];
+  const [left, right] = [MARGIN + 14, doc.page.width - MARGIN - 14]; // 14 pt: the feet of a narrow stop margin stand outside
   const scale = Math.min((right - left) / long, 90 / spec.railWidth); // 90 pt: a short wide rail leaves room for the rest
   const [x0, x1] = [(left + right - long * scale) / 2, (left + right + long * scale) / 2];
   const [y0, y1] = [top + 26, top + 26 + spec.railWidth * scale];
@@ -103,6 +103,6 @@ export function drawZero(doc: Doc, spec: SlotSpec, x: number, y: number): void {
   arrow([zx + 58, zy], `m-6 -2.5l6 2.5l-6 2.5`);
   arrow([zx, zy - 58], `m-2.5 6l2.5 -6l2.5 6`);
   zeroDisc(doc, zx, zy, 12);
-  write(doc, 'X', zx + 62, zy - 5, { font: 'bold', size: 10 });
+  write(doc, 'X', zx + 50, zy + 5, { font: 'bold', size: 10 });
   write(doc, 'Y', zx + 5, zy - 60, { font: 'bold', size: 10 });
 }

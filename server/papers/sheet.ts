@@ -56,32 +56,39 @@ function drawings(doc: Doc, program: BenchProgram, top: number): number {
   const wide = doc.page.width - MARGIN - left;
   let y = write(doc, 'Work zero', left, under + 10, { font: 'bold', size: 11 });
   for (const line of [words, "Z0: the rail's top.", 'The black-and-white disc marks it. The front edge is toward you, the fence along the back.']) y = write(doc, line, left, y + 2, { width: wide });
-  return Math.max(y, under + 118);
+  return Math.max(y, under + 110);
 }
 
-function setup(doc: Doc, program: BenchProgram, x: number, y: number, width: number): number {
+/** A column to write in: `size` is its text's. */
+interface Column {
+  readonly x: number;
+  readonly width: number;
+  readonly size: number;
+}
+
+function setup(doc: Doc, program: BenchProgram, { x, width, size }: Column, y: number): number {
   let at = heading(doc, 'Setup', x, y);
   for (const { name, value } of setupLines(program)) {
-    write(doc, name, x, at + 2, { size: 9 });
-    at = write(doc, value, x + 86, at + 2, { font: 'bold', size: 9, width: width - 86 });
+    write(doc, name, x, at + 2, { size });
+    at = write(doc, value, x + 92, at + 2, { font: 'bold', size, width: width - 92 });
     rule(doc, at, 0.4, x, x + width);
   }
   return at + 6;
 }
 
-function ticked(doc: Doc, lines: readonly string[], x: number, y: number, width: number): number {
+function ticked(doc: Doc, lines: readonly string[], { x, width, size }: Column, y: number): number {
   return lines.reduce((at, line) => {
-    tickBox(doc, x, at + 2.5);
-    return Math.max(write(doc, line, x + 15, at + 2.5, { size: 9.2, width: width - 15 }), at + 13) + 1.5;
+    tickBox(doc, x, at + 2.5, size);
+    return write(doc, line, x + 15, at + 2.5, { size, width: width - 15 }) + 1.5;
   }, y);
 }
 
 /** Every caution of the router, and those of this program's readback, each with its box. */
-function cautions(doc: Doc, { cautions: found, spec }: BenchProgram, x: number, y: number, width: number): number {
-  const inner = heading(doc, 'Before the spindle turns', x + 8, y + 6);
-  let at = ticked(doc, ROUTER_CAUTIONS, x + 8, inner, width - 16);
-  at = write(doc, LAST_WORD, x + 8, at + 2, { font: 'bold', size: 9.2, width: width - 16 });
-  if (found.length > 0) at = write(doc, found.map((finding) => `Caution: ${sentenceOf(finding, spec.units).text.replace(/\.$/, '')}.`).join(' '), x + 8, at + 2, { size: 8.6, width: width - 16 });
+function cautions(doc: Doc, { cautions: found, spec }: BenchProgram, { x, width, size }: Column, y: number): number {
+  const inside = { x: x + 8, width: width - 16, size };
+  let at = ticked(doc, ROUTER_CAUTIONS, inside, heading(doc, 'Before the spindle turns', x + 8, y + 6));
+  at = write(doc, LAST_WORD, x + 8, at + 2, { font: 'bold', size, width: width - 16 });
+  if (found.length > 0) at = write(doc, found.map((finding) => `Caution: ${sentenceOf(finding, spec.units).text.replace(/\.$/, '')}.`).join(' '), x + 8, at + 2, { size: size - 0.6, width: width - 16 });
   doc.rect(x, y, width, at - y + 5).lineWidth(1.5).stroke('#000');
   return at + 11;
 }
@@ -130,21 +137,36 @@ function foot(doc: Doc, link: string): void {
   doc.fill('#000');
 }
 
+/** Sizes of the columns' text, pt: the largest at which everything stands on one page. */
+const SIZES = [9.4, 8.8, 8.2, 7.6] as const;
+const FOOT = 122; // pt: blanks, bars and square
+
+/** Everything above the blanks; gives how far down it came. */
+function upper(doc: Doc, of: SheetOf, size: number): number {
+  const { program } = of;
+  const y = drawings(doc, program, head(doc, of));
+  rule(doc, y, 1.5);
+  const middle = doc.page.width / 2;
+  const width = middle - MARGIN - 10;
+  const [left, right] = [{ x: MARGIN, width, size }, { x: middle + 10, width, size }];
+  const underLeft = cautions(doc, program, left, setup(doc, program, left, y + 6));
+  const steps = sheetSteps(program, touchOff(program.spec, program.machine.units));
+  const underSteps = ticked(doc, steps, right, heading(doc, 'At the machine', right.x, y + 6));
+  const underRight = ticked(doc, STOPPED_STEPS, right, heading(doc, 'If it stops half-way', right.x, underSteps + 5));
+  return Math.max(underLeft, underRight);
+}
+
 /** The setup sheet of a rail as a PDF of one page, black on white. */
 export function sheetPdf(of: SheetOf, paper: PaperSize): Promise<Buffer> {
-  const { program } = of;
-  const doc = newPaper(paper, `${of.rail.name}, setup sheet ${program.mark}`);
-  const touch = touchOff(program.spec, program.machine.units);
-  const middle = doc.page.width / 2;
-  const wide = middle - MARGIN - 10;
-  let y = drawings(doc, program, head(doc, of));
-  rule(doc, y, 1.5);
-  y += 6;
-  const left = setup(doc, program, MARGIN, y, wide);
-  const underLeft = cautions(doc, program, MARGIN, left, wide);
-  const right = ticked(doc, sheetSteps(program, touch), middle + 10, heading(doc, 'At the machine', middle + 10, y), wide);
-  const underRight = ticked(doc, STOPPED_STEPS, middle + 10, heading(doc, 'If it stops half-way', middle + 10, right + 5), wide);
-  blanks(doc, program, Math.max(underLeft, underRight, doc.page.height - MARGIN - 128));
+  const fresh = () => newPaper(paper, `${of.rail.name}, setup sheet ${of.program.mark}`);
+  const room = (doc: Doc) => doc.page.height - MARGIN - FOOT;
+  const fits = SIZES.find((size) => {
+    const trial = fresh();
+    return upper(trial, of, size) <= room(trial);
+  });
+  const doc = fresh();
+  const end = upper(doc, of, fits ?? SIZES[3]);
+  blanks(doc, of.program, Math.max(end, room(doc)));
   foot(doc, of.link);
   return bytesOf(doc);
 }
