@@ -97,7 +97,7 @@ describe('what is said of a piece', () => {
 });
 
 describe('a piece as a form gives it', () => {
-  const refused = (raw: Partial<Record<keyof PieceInput, unknown>>) => {
+  const refused = (raw: object) => {
     const parsed = pieceSchema.safeParse({ ...THIRTEEN, ...raw });
     return parsed.success ? [] : parsed.error.issues.map(({ path }) => path.join('.'));
   };
