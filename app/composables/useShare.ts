@@ -1,8 +1,10 @@
 /**
  * The page's address holds the drawing. It follows what is typed once the typing rests, and opening one draws it; an
  * address that cannot be read says so and leaves the first drawing.
+ *
+ * @param options.follow false where the page has an address of its own: the drawing then only leaves as a copied link.
  */
-export function useShare() {
+export function useShare({ follow = true } = {}) {
   const slot = useSlotStore();
   const { announce } = useSaying();
   const damaged = ref(false);
@@ -24,6 +26,7 @@ export function useShare() {
   }
 
   onMounted(() => {
+    if (!follow) return;
     open();
     window.addEventListener('hashchange', open);
     watch(() => slot.draft, () => {
@@ -38,7 +41,7 @@ export function useShare() {
   });
 
   async function share(): Promise<void> {
-    const url = new URL(window.location.href);
+    const url = new URL(follow ? window.location.href : window.location.origin);
     url.hash = linkOf(slot.draft);
     copied.value = await copyText(url.href);
     if (!copied.value) window.history.replaceState(window.history.state, '', url.hash);

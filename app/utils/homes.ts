@@ -4,6 +4,8 @@ declare module '#app' {
   interface PageMeta {
     /** Who may see the page; everyone with an account where it is left out. */
     roles?: readonly Role[];
+    /** The page goes from edge to edge, as a drawing does. */
+    wide?: boolean;
   }
 }
 

@@ -117,7 +117,7 @@ describe("another shop's people", () => {
 });
 
 describe('what others may try', () => {
-  it.each([{ 'sec-fetch-site': 'cross-site' }, { 'sec-fetch-site': 'same-site' }, { origin: 'https://elsewhere.example' }, { origin: 'null' }])('%o is another site, and does nothing', async (headers) => {
+  it.each<Readonly<Record<string, string>>>([{ 'sec-fetch-site': 'cross-site' }, { 'sec-fetch-site': 'same-site' }, { origin: 'https://elsewhere.example' }, { origin: 'null' }])('%o is another site, and does nothing', async (headers) => {
     const answer = await owner.call('POST', '/api/woods', { ...WOOD, name: 'From elsewhere' }, headers);
     expect(answer.status).toBe(403);
     expect((await owner.get('/api/woods?q=From')).rows).toEqual([]);
