@@ -9,8 +9,8 @@ export type SpacingFinding = JobFinding<(typeof SPACING_RULES)[number]>;
 export const SPACING_PRACTICE = {
   /** How far a knock rolls a coin along its groove: two neighbours may each come this far. */
   knock: { in: 1 / 16, mm: 1.5 },
-  /** Breadth of a fingertip. */
-  finger: { in: 5 / 8, mm: 16 },
+  /** A fingertip from pad to nail: what comes between two coins when one is taken by its rim. */
+  finger: { in: 1 / 2, mm: 12 },
   /** How far down beside a coin a fingertip has to come to lift it. */
   grip: { in: 1 / 4, mm: 6 },
 } as const;

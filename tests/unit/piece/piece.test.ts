@@ -63,7 +63,7 @@ describe('what is said of a piece', () => {
     ['coins higher than the board', { railLanes: [1, 12], unionWidth: 0 }, [squad], 'coinsBacked A: Squad disagrees: aboveBoard'],
     ['coins before the union', { railLanes: [8] }, [tall], 'clearOfUnion A: Tall caution: coinsBeforeUnion'],
     ['faces behind the rail above', { kind: 'plank-board', lanes: 32, railLanes: [31, 32], height: 80 }, [squad], 'sight B: Squad caution: partHidden'],
-    ['shelf rows without room for a finger', { ...SHELF, height: 3 }, [squad], 'rowsApart A caution: noRoomForFinger'],
+    ['shelf rows without room for a finger', { ...SHELF, height: 2.7 }, [squad], 'rowsApart A caution: noRoomForFinger'],
     ['shelf rows that meet', { ...SHELF, height: 1.7 }, [squad], 'rowsApart A disagrees: touch'],
   ])('speaks of %s', (_what, raw, kinds, expected) => {
     expect(bad(raw, kinds)).toContain(expected);
