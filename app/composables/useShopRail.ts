@@ -31,17 +31,17 @@ export const draftOfRevision = ({ draft, request }: Pick<Revision, 'draft' | 're
 /** One rail of the shop: put on the page's drawing, and saved from it as its next revision. */
 export async function useShopRail(id: string) {
   const slot = useSlotStore();
-  const { data: rail, refresh, error } = await useFetch<ShopRail>(`/api/rails/${id}`);
-  const { data: history, refresh: refreshHistory } = await useFetch<{ readonly revisions: readonly Revision[] }>(`/api/rails/${id}/revisions`);
+  // Both before the first wait: after it Nuxt no longer knows which page asks.
+  const [{ data: rail, refresh, error }, { data: history, refresh: refreshHistory }] = await Promise.all([
+    useFetch<ShopRail>(`/api/rails/${id}`),
+    useFetch<{ readonly revisions: readonly Revision[] }>(`/api/rails/${id}/revisions`),
+  ]);
   if (error.value) throw createError({ status: error.value.status ?? 500, statusText: 'No such rail', fatal: true });
 
   const kept = computed(() => (rail.value ? linkOf(draftOfRevision(rail.value)) : ''));
   /** What is on the page is not what is kept. */
   const changed = computed(() => rail.value !== undefined && linkOf(slot.draft) !== kept.value);
-  if (import.meta.client && rail.value) slot.load(draftOfRevision(rail.value));
-  onMounted(() => {
-    if (rail.value && changed.value) slot.load(draftOfRevision(rail.value));
-  });
+  if (rail.value) slot.load(draftOfRevision(rail.value));
 
   const failure = ref('');
   const busy = ref(false);
