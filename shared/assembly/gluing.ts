@@ -1,4 +1,4 @@
-import { type Units, convertLength } from '../measure/units';
+import { convertLength } from '../measure/units';
 import { factsOf, lanesOf } from '../piece/kinds';
 import type { PieceSpec } from '../piece/spec';
 import type { FinishStep } from './finish';
@@ -47,7 +47,7 @@ export function gluePlan(piece: PieceSpec, boardThickness: number): GluePlan {
   const strips = lanesOf(piece.kind, piece).length;
   const panels = panelsOf(strips, GLUE.openMinutes / GLUE.stripMinutes);
   const clamps = Math.max(2, Math.ceil(width / CLAMPS_APART[units]) + 1);
-  const inch = (length: number) => convertLength(length, units, 'in' satisfies Units);
+  const inch = (length: number) => convertLength(length, units, 'in');
   const share = (inch(width) * inch(boardThickness)) / clamps;
   const pounds = (mpa: number) => (mpa / MPA_PER_PSI) * share;
   const clampHours = GLUE.clampMinutes / 60;

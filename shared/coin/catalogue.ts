@@ -50,6 +50,7 @@ export const CATALOGUE: readonly CatalogueCoin[] = [
   britain('British pound, twelve-sided, point to point', 23.43, 2.8, 8.75),
   britain('British pound, round, 1983 to 2017', 22.5, 3.15, 9.5),
   britain('British 5 pence', 18, 1.7, 3.25),
+  britain('British 5 pounds, crown', 38.61, 2.89, 28.28),
   medal('Medal 1 1/2 in', 38.1, 3, null),
   medal('Medal 1 3/4 in', 44.45, 3, null),
   medal('Medal 2 in', 50.8, 4, null),

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { LENGTH_HELP, formatSize, lengthIn, parseLength } from '../measure/length';
 import { objectError } from '../measure/messages';
-import { UNITS, type Units, byUnits } from '../measure/units';
+import { UNITS, type Units, byUnits, convertLength } from '../measure/units';
 
 /** One kind of coin: sizes in the tally's units, mass in grams (null: not known, a brass disc is assumed for weights). */
 export interface CoinKind {
@@ -100,6 +100,12 @@ export type TallyInput = z.input<typeof tallySchema>;
 /** Coins in a tally. */
 export function countOf(tally: Tally): number {
   return tally.kinds.reduce((sum, { count }) => sum + count, 0);
+}
+
+/** A tally in the piece's units. */
+export function tallyIn(units: Units, tally: Tally): Tally {
+  const convert = (length: number) => convertLength(length, tally.units, units);
+  return { units, kinds: tally.kinds.map((kind) => ({ ...kind, diameter: convert(kind.diameter), thickness: convert(kind.thickness) })) };
 }
 
 /** Density assumed of a coin whose mass nobody gave, g/cm³: brass, the heavier of the two usual metals (brass 8.5, zinc alloy 6.6: common practice), so that hardware is not chosen too weak. */

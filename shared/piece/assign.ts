@@ -80,7 +80,8 @@ function problemsOf({ rails, kinds, pins, gap }: AssignRequest, load: Load, pinn
     if (count > at(load.counts, kind)) problems.push({ field: 'pins', message: `${count} of ${name} are pinned and there are ${at(load.counts, kind)}. Pin fewer.` });
   });
   rails.forEach(({ name }, room) => {
-    if (costOf(pinned[room] ?? [], load.costs) > at(load.rooms, room)) problems.push({ field: 'pins', message: `The coins pinned to rail ${name} are longer than its groove. Pin fewer there.` });
+    const length = costOf(pinned[room] ?? [], load.costs);
+    if (length > 0 && length > at(load.rooms, room)) problems.push({ field: 'pins', message: `The coins pinned to rail ${name} are longer than its groove. Pin fewer there.` });
   });
   return problems;
 }
@@ -96,7 +97,7 @@ export function assignCoins(request: AssignRequest): { readonly ok: true; readon
   // What is pinned stands already: its room and its coins are taken off.
   const rest: Load = {
     ...load,
-    rooms: load.rooms.map((room, index) => room - costOf(pinned[index] ?? [], load.costs)),
+    rooms: load.rooms.map((room, index) => Math.max(0, room - costOf(pinned[index] ?? [], load.costs))), // a groove shorter than its gaps holds nothing
     counts: load.counts.map((count, kind) => count - sumOf(pinned.map((row) => at(row, kind)))),
   };
   const must = rest.rooms.flatMap((_, room) => (sumOf(pinned[room] ?? []) > 0 ? [room] : []));

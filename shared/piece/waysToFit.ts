@@ -27,7 +27,7 @@ function restOf(request: AssignRequest): Load {
   const pinned = request.rails.map((rail) => request.kinds.map((kind) => sumOf(request.pins.filter((pin) => pin.rail === rail.name && pin.kind === kind.name).map(({ count }) => count))));
   return {
     ...load,
-    rooms: load.rooms.map((room, index) => room - costOf(pinned[index] ?? [], load.costs)),
+    rooms: load.rooms.map((room, index) => Math.max(0, room - costOf(pinned[index] ?? [], load.costs))),
     counts: load.counts.map((count, kind) => count - sumOf(pinned.map((row) => at(row, kind)))),
   };
 }

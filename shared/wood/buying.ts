@@ -12,6 +12,8 @@ export interface BoardOnSale {
   readonly width: number;
   readonly length: number;
   readonly price: number;
+  /** Board feet that it is sold by; null where it is sold by the piece or by area. */
+  readonly boardFeet: number | null;
 }
 
 /** A strip in the rack: used before anything is bought. */
@@ -33,6 +35,8 @@ export interface BuyingPlan {
   readonly unplaced: readonly { readonly part: string; readonly reason: 'thickness' | 'width' | 'length' }[];
   /** Share of the bought boards' area that becomes no part. */
   readonly waste: number;
+  /** Board feet bought, of the boards that are sold so. */
+  readonly boardFeet: number;
 }
 
 const STEPS = 10_000; // whole steps in one unit: finer than any saw
@@ -187,6 +191,7 @@ export function planBuying(list: readonly RoughPart[], boards: readonly BoardOnS
     cost: buy.reduce((sum, { cost }) => sum + cost, 0),
     bound,
     unplaced,
+    boardFeet: buy.reduce((sum, { board, count }) => sum + (board.boardFeet ?? 0) * count, 0),
     waste: area > 0 ? 1 - used / area : 0,
   };
 }

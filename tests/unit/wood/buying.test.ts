@@ -1,11 +1,12 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { type BoardOnSale, planBuying } from '#shared/wood/buying';
+import { boardsOnSale } from '#shared/wood/onSale';
 import { type Build, type Part, clearLengths, cutList, partsOf } from '#shared/wood/cutList';
 import { THIRTEEN, pieceOf } from '../piece/thirteenStripes';
 
 const part = (name: string, quantity: number, length: number, width: number, more: Partial<Part> = {}): Part => ({ name, quantity, length, width, thickness: 0.75, wood: 'walnut', grain: 'along', ...more });
-const board = (name: string, width: number, length: number, price: number, more: Partial<BoardOnSale> = {}): BoardOnSale => ({ name, wood: 'walnut', thickness: 0.75, width, length, price, ...more });
+const board = (name: string, width: number, length: number, price: number, more: Partial<BoardOnSale> = {}): BoardOnSale => ({ name, wood: 'walnut', thickness: 0.75, width, length, price, boardFeet: null, ...more });
 const bare = { trimming: 0, edging: 0, planing: 0 };
 
 /** Every board's sawing from its own coordinates: strips within its width and a kerf apart, parts within its length and a kerf apart, every part once. */
@@ -43,6 +44,19 @@ describe('boards to buy', () => {
     expect(plan).toMatchObject({ cost: 6400, bound: 6400, unplaced: [] });
     expect(plan.buy[0]?.layouts[0]?.strips.map(({ at, width }) => [at, width])).toEqual([[0, 2.25], [2.375, 2.25], [4.75, 2.25]]);
     expect(planBuying(cutList(parts, bare), [board('1 × 8 × 8 ft', 7.25, 96, 3200)], [], 0.5).cost).toBe(3200 * 3); // at half an inch of kerf a board holds two strips
+  });
+
+  it('come from the sizes on sale, priced by the board foot', () => {
+    // FACTS.md C4: a 1 × 6 is 3/4 × 5 1/2 in dressed (PS 20); 1 × 6 × 10 ft is 5 board feet.
+    const sale = boardsOnSale({ wood: 'walnut', quarters: 1, centsPerBoardFoot: 1200, lengthsFeet: [8, 10], units: 'mm' });
+    const six = sale.find(({ name }) => name === '1 × 6 × 10 ft');
+    expect(six).toMatchObject({ boardFeet: 5, price: 6000 });
+    expect(six?.thickness).toBeCloseTo(19.05, 9);
+    expect(six?.width).toBeCloseTo(139.7, 9);
+    expect(six?.length).toBeCloseTo(3048, 9);
+    const plan = planBuying(cutList([part('stripe', 4, 2900, 100, { thickness: 19 })], bare), sale, [], 3);
+    expect(plan.cost).toBeLessThan(4 * 6000);
+    expect(plan.cost).toBe(Math.round(plan.boardFeet * 1200));
   });
 
   it('share widths out among sizes at the least cost', () => {
