@@ -1,6 +1,7 @@
 import type { Units } from '#shared/measure/units';
 import { type Bit, bitAdvice } from '#shared/shop/bit';
 import { formatSize } from '#shared/measure/length';
+import { figureIn, figureOrNull, figureText, rateAfter, sizeAfter, sizeIn, sizeOrNull, sizeText } from './formText';
 
 /** A bit as its form holds it: figures as typed. */
 export interface BitForm {

@@ -1,6 +1,7 @@
 import type { Units } from '#shared/measure/units';
 import { DEFAULT_OPTIONS } from '#shared/program/options';
 import type { Holding, Machine } from '#shared/shop/machine';
+import { figureIn, figureOrNull, figureText, rateAfter, sizeAfter, sizeIn, sizeOrNull, sizeText } from './formText';
 
 /** A machine as its form holds it: figures as typed. */
 export interface MachineForm {

@@ -96,3 +96,11 @@ export function specFacts(spec: SlotSpec): Fact[] {
     { name: 'Safe height', value: of(spec.safeHeight) },
   ];
 }
+
+/** How long a bit has cut: `12 minutes`, `1 hour 5 minutes`. */
+export function cuttingTime(minutes: number): string {
+  const whole = Math.round(minutes);
+  const [hours, rest] = [Math.floor(whole / 60), whole % 60];
+  const words = (count: number, one: string) => `${count} ${count === 1 ? one : `${one}s`}`;
+  return hours === 0 ? words(rest, 'minute') : rest === 0 ? words(hours, 'hour') : `${words(hours, 'hour')} ${words(rest, 'minute')}`;
+}

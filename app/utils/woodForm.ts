@@ -1,5 +1,6 @@
 import type { Units } from '#shared/measure/units';
 import type { OwnWood } from '#shared/shop/wood';
+import { figureIn, rateAfter, sizeAfter, sizeIn, sizeText } from './formText';
 
 /** A wood of the shop's own as its form holds it: figures as typed. */
 export interface WoodForm {
@@ -15,6 +16,9 @@ export interface ChipLoadForm {
   least: string;
   most: string;
 }
+
+/** Kinds of an own wood as a form and a list call them. */
+export const OWN_KIND_WORDS = { hardwood: 'Hardwood', softwood: 'Softwood', sheet: 'Sheet goods' } as const satisfies Record<OwnWood['kind'], string>;
 
 export const newChipLoad = (): ChipLoadForm => ({ diameter: '', least: '', most: '' });
 export const newWood = (): WoodForm => ({ units: 'in', name: '', kind: 'hardwood', chipLoads: [], dustCaution: '', moves: 'yes' });
