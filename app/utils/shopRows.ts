@@ -121,6 +121,6 @@ export interface ListColumn<Row> {
   /** A moment rather than words: `text` gives it as ISO 8601. */
   readonly moment?: boolean;
   readonly to?: (row: Row) => string | null;
-  /** Figures stand to the right, marks in mono, notes may wrap. */
-  readonly kind?: 'figure' | 'mono' | 'wide';
+  /** Figures stand to the right, marks in mono, notes may wrap, rows of figures may not. */
+  readonly kind?: 'figure' | 'mono' | 'wide' | 'keep';
 }

@@ -63,9 +63,15 @@ const columns = {
 const selectBrief = () => useDatabase().select(columns).from(railPrograms)
   .innerJoin(rails, eq(rails.id, railPrograms.railId)).innerJoin(people, eq(people.id, railPrograms.madeBy));
 
+/** A mark's beginning as typed (`k74q`, `k74 q`) in the form that marks are kept in: `K74-Q`. */
+function markBeginning(typed: string): string {
+  const letters = typed.toUpperCase().replace(/[\s-]/g, '');
+  return letters.length > 3 ? `${letters.slice(0, 3)}-${letters.slice(3)}` : letters;
+}
+
 /** The shop's programs; `newest` above `revision` means that the rail was changed since. */
 export async function listRailPrograms(shopId: string, query: ListQuery) {
-  const page = pageOf(SHAPE, shopId, { ...query, q: query.q.toUpperCase() });
+  const page = pageOf(SHAPE, shopId, { ...query, q: markBeginning(query.q) });
   const rows = await selectBrief().where(page.where).orderBy(...page.orderBy).limit(page.limit);
   return page.cut(rows, (row, sort) => (sort === 'mark' ? row.mark : row.madeAt));
 }
