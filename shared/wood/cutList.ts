@@ -103,3 +103,8 @@ export function clearLengths(length: number, defects: readonly Defect[], kerf: n
   clear.push(length - start);
   return clear.filter((each) => each > 0);
 }
+
+/** A board with defects as the clear pieces it gives: each is used like an offcut. */
+export function clearPieces<Piece extends { readonly name: string; readonly length: number }>(board: Piece, defects: readonly Defect[], kerf: number): Piece[] {
+  return clearLengths(board.length, defects, kerf).map((length, index) => ({ ...board, name: `${board.name}, clear piece ${index + 1}`, length }));
+}

@@ -69,6 +69,14 @@ describe('what is said of a piece', () => {
     expect(bad(raw, kinds)).toContain(expected);
   });
 
+  it('is that a coin has no board behind its top exactly where the board ends below it', () => {
+    // Own arithmetic: 1 3/4 in at 23.5 degrees (FACTS.md D2) rests 1.75 cos a − 3/16 = 1.417 above the rail's top;
+    // in four lanes of 12 in the rail's top is 1 1/8 below the board's edge, in three 1 5/8.
+    const planks = (lanes: number) => bad({ kind: 'plank-board', lanes, railLanes: [1], height: 12 }).filter((line) => line.startsWith('coinsBacked'));
+    expect(planks(4)).toEqual(['coinsBacked A: Squad disagrees: aboveBoard']);
+    expect(planks(3)).toEqual([]);
+  });
+
   it('is nothing of shelf rows that stand apart', () => {
     expect(bad({ ...SHELF, height: 6 }).filter((line) => line.startsWith('rowsApart'))).toEqual([]);
   });

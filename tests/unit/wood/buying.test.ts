@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { type BoardOnSale, planBuying } from '#shared/wood/buying';
 import { boardsOnSale } from '#shared/wood/onSale';
-import { type Build, type Part, clearLengths, cutList, partsOf } from '#shared/wood/cutList';
+import { type Build, type Part, clearLengths, clearPieces, cutList, partsOf } from '#shared/wood/cutList';
 import { THIRTEEN, pieceOf } from '../piece/thirteenStripes';
 
 const part = (name: string, quantity: number, length: number, width: number, more: Partial<Part> = {}): Part => ({ name, quantity, length, width, thickness: 0.75, wood: 'walnut', grain: 'along', ...more });
@@ -127,5 +127,6 @@ describe('a cut list', () => {
     expect(clearLengths(96, [{ from: -1, to: 3 }, { from: 94, to: 99 }], 0)).toEqual([91]);
     expect(clearLengths(96, [{ from: 10, to: 60 }, { from: 20, to: 30 }], 0)).toEqual([10, 36]);
     expect(clearLengths(20, [{ from: 0, to: 20 }], 0.125)).toEqual([]);
+    expect(clearPieces({ name: 'plank', length: 96, width: 7 }, [{ from: 40, to: 42 }], 0.5).map(({ length, width }) => [length, width])).toEqual([[39.5, 7], [53.5, 7]]);
   });
 });
