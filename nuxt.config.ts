@@ -1,5 +1,7 @@
 import { fileURLToPath } from 'node:url';
 import { readMigrationFiles } from 'drizzle-orm/migrator';
+import { THEME_SCRIPT } from './app/utils/themeScript';
+import { offline } from './server/offline/worker';
 import { CONTENT_SECURITY_POLICY, SECURITY_HEADERS } from './server/security/headers';
 
 const here = (path: string) => fileURLToPath(new URL(path, import.meta.url));
@@ -14,14 +16,14 @@ const compilerOptions = {
 const exact = { ...compilerOptions, exactOptionalPropertyTypes: true };
 
 export default defineNuxtConfig({
-  modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', 'nuxt-auth-utils', '@nuxt/eslint'],
+  modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', 'nuxt-auth-utils', '@nuxt/eslint', '@vite-pwa/nuxt'],
   css: ['~/assets/css/main.css'],
   dir: { public: 'app/public' },
   devtools: { enabled: false },
   telemetry: { enabled: false },
   compatibilityDate: '2026-11-01',
 
-  app: { head: { htmlAttrs: { lang: 'en' } } },
+  app: { head: { htmlAttrs: { lang: 'en' }, script: [{ innerHTML: THEME_SCRIPT }] } },
 
   // Our own /api/account says who is signed in; a visitor is given no session cookie by looking at a page.
   auth: { loadStrategy: 'none', webAuthn: true },
@@ -47,7 +49,13 @@ export default defineNuxtConfig({
   routeRules: {
     '/**': { headers: { ...SECURITY_HEADERS, 'content-security-policy': CONTENT_SECURITY_POLICY } },
     '/api/**': { headers: { 'cache-control': 'no-store' } },
+    // The bench is the same page for everyone until its scripts run, so that a tablet can keep it without keeping anybody's day in it.
+    '/bench': { ssr: false },
+    '/bench/**': { ssr: false },
+    '/bench-worker.js': { headers: { 'cache-control': 'no-cache' } },
   },
+
+  pwa: offline.options,
 
   // Nuxt's own data fetching is made at load by calls that look as if they did something: without use, without weight.
   vite: { build: { rollupOptions: { treeshake: { moduleSideEffects: (id) => !/nuxt\/dist\/app\/composables\/(asyncData|fetch|component|preview)\.js/.test(id) } } } },
@@ -65,6 +73,7 @@ export default defineNuxtConfig({
   hooks: {
     // The setup sheet stands in the page; its code is fetched by the first touch (useTouched), so nothing preloads it.
     'build:manifest'(manifest) {
+      offline.note(manifest);
       const part = (path: string) => Object.values(manifest).find(({ src }) => src?.endsWith(path));
       const needed = new Set(part('pages/index.vue')?.imports);
       const sheet = part('Program/ProgramSetupSheet.vue');

@@ -15,6 +15,7 @@ export function useAccount() {
   const request = useRequestFetch();
   async function refresh(): Promise<Account> {
     account.value = await request<Account>('/api/account');
+    if (import.meta.client) await forgetOthers(account.value.person?.id ?? null);
     return account.value;
   }
   return { account, refresh };
