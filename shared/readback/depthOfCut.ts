@@ -1,6 +1,6 @@
 import { type Point3, norm } from '../geometry/point';
 import type { Piece } from './cut';
-import { PieceIndex } from './pieceIndex';
+import { PieceIndex, boxAround } from './pieceIndex';
 
 /** Lengths nearer than this are equal: far above float noise, far below any last decimal. */
 const NOISE = 1e-9;
@@ -72,15 +72,18 @@ function places(piece: Piece, order: number, index: PieceIndex, radius: number, 
   const length = norm(dx, dy);
   if (length === 0) return [1];
   const project = (x: number, y: number) => ((x - piece.x0) * dx + (y - piece.y0) * dy) / (length * length);
+  // Height runs evenly along both, so its ends bound what stands above this piece.
+  const above = (other: Piece, t: number) => heightNear(other, piece.x0 + t * dx, piece.y0 + t * dy) - (piece.z0 + t * (piece.z1 - piece.z0));
+  const same = index.sameWayBefore(order);
+  if (same && Math.max(above(same, 0), above(same, 1)) <= depth) return [];
   let open: (readonly [number, number])[] = [[0, 1]];
   const bends: number[] = [];
-  index.newestFirst(along(piece, 0.5), order, length / 2 + radius, (other) => {
+  index.newestFirst(boxAround(piece, 2 * radius), order, (other) => {
     const [a, b] = [project(other.x0, other.y0), project(other.x1, other.y1)];
     bends.push(a, b, a - radius / length, a + radius / length, b - radius / length, b + radius / length);
     if (Math.abs(offLine(piece, other.x0, other.y0)) > NOISE || Math.abs(offLine(piece, other.x1, other.y1)) > NOISE) return false;
     const [from, to] = [Math.min(a, b), Math.max(a, b)];
-    const above = (t: number) => heightNear(other, along(piece, t).x, along(piece, t).y) - along(piece, t).z;
-    if (Math.max(above(Math.max(0, from)), above(Math.min(1, to))) > depth) return false;
+    if (Math.max(above(other, Math.max(0, from)), above(other, Math.min(1, to))) > depth) return false;
     open = without(open, from, to);
     return open.length === 0;
   });
@@ -154,7 +157,8 @@ function coversAbove(line: Line, order: number, index: PieceIndex, depth: number
   const covers: Cover[] = [];
   let open: (readonly [number, number])[] = [[line.low, line.high]];
   let closed = false;
-  index.newestFirst(line.at, order, line.radius, (piece) => {
+  const { at: { x, y }, radius } = line;
+  index.newestFirst({ left: x - 2 * radius, right: x + 2 * radius, front: y - 2 * radius, back: y + 2 * radius }, order, (piece) => {
     const stretch = stretchAcross(piece, line);
     if (!stretch) return false;
     const [from, to] = [Math.max(stretch[0], line.low), Math.min(stretch[1], line.high)];
