@@ -1,4 +1,4 @@
-import { type Standing, standingOf } from '#shared/coin/lean';
+import { type Rest, restOf } from '#shared/coin/rest';
 import { LENGTH_HELP, formatSize, parseLength } from '#shared/measure/length';
 import { type Units, byUnits } from '#shared/measure/units';
 import { COIN_KEYS, type CoinKey, type Draft, unitsOf } from './draft';
@@ -37,13 +37,13 @@ function widthAbove(thickness: number, units: Units): number {
 }
 
 /** How the coin stands, in one sentence. */
-export function standingWords(standing: Standing, coin: Coin, units: Units): string {
+export function standingWords(standing: Rest, coin: Coin, units: Units): string {
   switch (standing.how) {
     case 'tooThick': return `Too thick for this groove: make it ${formatSize(widthAbove(coin.thickness, units), units)} or wider.`;
     case 'upright': return standing.most === 0 ? 'A press fit: stands upright without play.' : 'Stands upright by itself and only rattles.';
     case 'sinks': return 'Sinks into this groove: make it shallower.';
-    case 'falls': return 'Falls out of this groove: make it deeper or narrower.';
-    case 'leans': return standing.keeps
+    case 'slips': return 'Slips over the front lip: make the groove deeper or narrower.';
+    case 'leans': return standing.against === 'board' ? `Leans ${standing.lean.toFixed(1)}° on the board behind it.` : standing.keeps
       ? `Leans ${standing.lean.toFixed(1)}°.`
       : `Leans ${standing.lean.toFixed(1)}° and can slip over the rim: stand a board behind it, or make the groove narrower or deeper.`;
   }
@@ -59,8 +59,8 @@ export interface CoinShape {
   readonly reach: number;
 }
 
-export function coinShape(coin: Coin, groove: { readonly width: number; readonly depth: number }): CoinShape & { readonly standing: Standing } {
-  const standing = standingOf({ ...coin, ...groove });
+export function coinShape(coin: Coin, groove: { readonly width: number; readonly depth: number; readonly boardDistance: number | null }): CoinShape & { readonly standing: Rest } {
+  const standing = restOf({ ...coin, width: groove.width, depth: groove.depth, boardDistance: groove.boardDistance });
   const { diameter: d, thickness: t } = coin;
   const stands = standing.how === 'leans' || standing.how === 'upright';
   const a = standing.how === 'leans' ? (standing.lean * Math.PI) / 180 : 0;

@@ -23,6 +23,9 @@ export type RateKey = (typeof RATE_KEYS)[number];
 export const COUNT_KEYS = ['flutes', 'spindleSpeed', 'rampAngle', 'stepover', 'machine.spindleRange.0', 'machine.spindleRange.1'] as const;
 export type CountKey = (typeof COUNT_KEYS)[number];
 
+/** Whether a board stands behind the rail's back edge, as on a piece: '' yes, 'none'. Of the coin's picture, like its sizes. */
+export const hasBoard = (draft: Draft): boolean => draft.picks.coinBoard === '';
+
 export const WORD_KEYS = ['name', 'options.fileEnding'] as const;
 export type WordKey = (typeof WORD_KEYS)[number];
 
@@ -34,6 +37,7 @@ export const PICK_KEYS = [
   'ends', 'wood', 'direction', 'bitKind', 'centreCutting', 'workZero', 'spindle', 'machine.heavy',
   'options.lineNumbers', 'options.lineEndings', 'options.percent', 'options.comments', 'options.speedWord',
   'options.spindleWait', 'options.end', 'options.programUnits',
+  'coinBoard',
 ] as const;
 export type PickKey = (typeof PICK_KEYS)[number];
 

@@ -27,7 +27,7 @@ const TEXT_CODES: Readonly<Record<TextKey, string>> = {
 const PICK_CODES: Readonly<Record<PickKey, string>> = {
   'ends': 'E', 'wood': 'W', 'direction': 'D', 'bitKind': 'B', 'centreCutting': 'C', 'workZero': 'Z', 'spindle': 'S',
   'machine.heavy': 'H', 'options.lineNumbers': 'N', 'options.lineEndings': 'L', 'options.percent': 'P',
-  'options.comments': 'K', 'options.speedWord': 'O', 'options.spindleWait': 'A', 'options.end': 'M', 'options.programUnits': 'U',
+  'options.comments': 'K', 'options.speedWord': 'O', 'options.spindleWait': 'A', 'options.end': 'M', 'options.programUnits': 'U', 'coinBoard': 'Q',
 };
 
 /** Only what was typed or picked. */

@@ -55,7 +55,7 @@ export function rawRequestOf(draft: Draft): { [key: string]: Raw } {
     } else if (draft.texts[key].text.trim() !== '') raw[key] = editText(draft.texts[key], key, units).trim();
   }
   for (const [key, value] of Object.entries(draft.picks)) {
-    if (value === '') continue;
+    if (value === '' || key === 'coinBoard') continue;
     put(raw, key, YES_NO.has(key) ? value === 'true' : value);
   }
   const chipLoad = pair(raw.chipLoadRange);

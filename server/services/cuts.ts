@@ -1,7 +1,9 @@
 import { and, asc, count, desc, eq, gt, ne } from 'drizzle-orm';
 import type { z } from 'zod';
 import type { cutSchema } from '#shared/shop/cut';
+import { assert } from '#shared/assert';
 import type { ListQuery } from '#shared/shop/list';
+import { cutEvent, moveRail } from '#shared/shop/railStatus';
 import { allOrNothing } from '../db/client';
 import { bits, cuts, machines, people, railPrograms, rails } from '../db/schema';
 import { useDatabase } from '../db/shop';
@@ -31,23 +33,27 @@ export async function logCut(by: Actor, cut: z.output<typeof cutSchema>): Promis
   const now = new Date();
   const cutAt = new Date(Math.min(Date.parse(cut.cutAt), now.getTime() + LATEST));
   const { id, outcome, reason, seconds, widths, depths } = cut;
-  const done = (await cutWell(by.shopId, program.railId)) + (outcome === 'well' ? 1 : 0);
-  const [rail] = await database.select({ quantity: rails.quantity }).from(rails).where(eq(rails.id, program.railId));
-  const finished = outcome === 'well' && program.revision === program.newest && done >= (rail?.quantity ?? 1);
+  const [rail] = await database.select({ quantity: rails.quantity, status: rails.status }).from(rails).where(eq(rails.id, program.railId));
+  assert(rail !== undefined, 'a program has its rail');
+  const event = outcome === 'spoiled' ? 'spoiled' : cutEvent((await cutWell(by.shopId, program.railId)) + 1, rail.quantity);
+  // A cut of an older drawing happened and is logged; it does not move the rail.
+  const moved = program.revision === program.newest ? moveRail(rail.status, event) : null;
   await allOrNothing(database, [
     database.insert(cuts).values({
       id, shopId: by.shopId, railId: program.railId, programId: program.id, machineId: program.machineId, bitId: program.bitId, personId: by.id,
       outcome, reason, seconds, widths, depths, cutAt, loggedAt: now,
     }),
-    ...(finished ? [database.update(rails).set({ status: 'cut', updatedAt: now }).where(eq(rails.id, program.railId))] : []),
+    ...(moved?.ok ? [database.update(rails).set({ status: moved.status, updatedAt: now }).where(eq(rails.id, program.railId))] : []),
     deed(by, outcome === 'well' ? 'cut rail' : 'spoiled rail', program.rail),
   ]);
   return 'logged';
 }
 
-/** How many of a rail were cut well. */
+/** How many of a rail were cut well, to its drawing of now. */
 export async function cutWell(shopId: string, railId: string): Promise<number> {
-  const [row] = await useDatabase().select({ count: count() }).from(cuts).where(and(eq(cuts.shopId, shopId), eq(cuts.railId, railId), eq(cuts.outcome, 'well')));
+  const [row] = await useDatabase().select({ count: count() }).from(cuts)
+    .innerJoin(railPrograms, eq(railPrograms.id, cuts.programId)).innerJoin(rails, and(eq(rails.id, cuts.railId), eq(rails.revision, railPrograms.revision)))
+    .where(and(eq(cuts.shopId, shopId), eq(cuts.railId, railId), eq(cuts.outcome, 'well')));
   return row?.count ?? 0;
 }
 

@@ -3,6 +3,7 @@ import type { MadeProgram } from '#shared/makeProgram';
 import type { CutWith } from '#shared/shop/forMachine';
 import type { ListQuery } from '#shared/shop/list';
 import type { CutWithInput } from '#shared/shop/rail';
+import { type RailStatus, moveRail } from '#shared/shop/railStatus';
 import { allOrNothing } from '../db/client';
 import { people, railPrograms, rails } from '../db/schema';
 import { useDatabase } from '../db/shop';
@@ -33,20 +34,21 @@ export async function recordsFor(shopId: string, { machineId, bitId, holding, wo
 
 /** Keeps a rail's program with everything it was made from; the rail is ready to be cut. The same text again is the same program. */
 export async function keepRailProgram(
-  by: Actor, rail: { readonly id: string; readonly name: string; readonly revision: number }, made: GoodProgram, chosen: CutWithInput, { machine, bit }: CutWith,
+  by: Actor, rail: { readonly id: string; readonly name: string; readonly revision: number; readonly status: RailStatus }, made: GoodProgram, chosen: CutWithInput, { machine, bit }: CutWith,
 ): Promise<string> {
   const database = useDatabase();
   const [before] = await database.select({ id: railPrograms.id }).from(railPrograms)
     .where(and(eq(railPrograms.railId, rail.id), eq(railPrograms.revision, rail.revision), eq(railPrograms.sha256, made.sha256), eq(railPrograms.machineId, chosen.machineId), eq(railPrograms.bitId, chosen.bitId)));
   if (before) return before.id;
   const id = newId();
+  const moved = moveRail(rail.status, 'programMade');
   const { mark, sha256, fileName, program, spec, readback, summary } = made;
   await allOrNothing(database, [
     database.insert(railPrograms).values({
       id, shopId: by.shopId, railId: rail.id, revision: rail.revision, machineId: chosen.machineId, bitId: chosen.bitId, mark, sha256, fileName, text: program,
       spec, machine, bit, holding: chosen.holding, readback, summary, madeBy: by.id, madeAt: new Date(),
     }),
-    database.update(rails).set({ status: 'ready', updatedAt: new Date() }).where(and(eq(rails.shopId, by.shopId), eq(rails.id, rail.id))),
+    database.update(rails).set({ status: moved.ok ? moved.status : rail.status, updatedAt: new Date() }).where(and(eq(rails.shopId, by.shopId), eq(rails.id, rail.id))),
     deed(by, `made program ${mark} for rail`, rail.name),
   ]);
   return id;

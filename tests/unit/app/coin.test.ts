@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { coinOf, coinProblems, coinShape, standingWords } from '../../../app/utils/coin';
-import { type Draft, FIRST_DRAFT, withText } from '../../../app/utils/draft';
+import { type Draft, FIRST_DRAFT, hasBoard, withPick, withText } from '../../../app/utils/draft';
 import { draftFrom, linkOf } from '../../../app/utils/link';
 import { problemsOf } from '../../../app/utils/problems';
 import { rawRequestOf } from '../../../app/utils/rawRequest';
@@ -9,7 +9,7 @@ import { coinPoints, scaleForCoin, sectionView } from '../../../app/utils/sectio
 const BARE = withText(withText(FIRST_DRAFT, 'coinDiameter', ''), 'coinThickness', '');
 const MM: Draft = { ...BARE, figures: 'mm' };
 const words = (coin: { diameter: number; thickness: number }, width: number, depth: number, units: 'in' | 'mm' = 'mm') =>
-  standingWords(coinShape(coin, { width, depth }).standing, coin, units);
+  standingWords(coinShape(coin, { width, depth, boardDistance: null }).standing, coin, units);
 
 describe('the coin in the section', () => {
   test('is the squad coin until another is typed, in either unit', () => {
@@ -44,8 +44,19 @@ describe('the coin in the section', () => {
     expect(words({ diameter: 1.75, thickness: 0.125 }, 0.375, 0.1875, 'in')).toContain('stand a board behind it');
   });
 
+  test("leans on the board at the rail's back edge, as on a piece, until the board is taken away", () => {
+    // FACTS.md D2 and DESIGN.md 5: 3/8 + 7/16 in to the board; Founders' 19.4, Squad 23.5, Mutual-aid 28.2, Cadet 34.9 degrees.
+    const before = { width: 0.375, depth: 0.1875, boardDistance: 0.4375 };
+    const leans = [[2, 0.157], [1.75, 0.125], [1.5, 0.118], [1.25, 0.118]].map(([diameter = 0, thickness = 0]) => standingWords(coinShape({ diameter, thickness }, before).standing, { diameter, thickness }, 'in'));
+    expect(leans).toEqual([19.4, 23.5, 28.2, 34.9].map((lean) => `Leans ${lean}° on the board behind it.`));
+    const without = withPick(FIRST_DRAFT, 'coinBoard', 'none');
+    expect([hasBoard(FIRST_DRAFT), hasBoard(without)]).toEqual([true, false]);
+    expect(draftFrom(linkOf(without))?.picks.coinBoard).toBe('none');
+    expect(rawRequestOf(without)).toEqual(rawRequestOf(FIRST_DRAFT));
+  });
+
   test('is drawn with its low edge on the floor, its other edge at one wall and its face on the other rim', () => {
-    const { corners, stands } = coinShape({ diameter: 44.45, thickness: 3 }, { width: 4, depth: 8 });
+    const { corners, stands } = coinShape({ diameter: 44.45, thickness: 3 }, { width: 4, depth: 8, boardDistance: null });
     expect(stands).toBe(true);
     const [low, high, , wall] = corners;
     expect(low?.[1]).toBe(0);
@@ -56,13 +67,13 @@ describe('the coin in the section', () => {
   });
 
   test('one too thick stands on the rim', () => {
-    const shape = coinShape({ diameter: 40, thickness: 5 }, { width: 4, depth: 8 });
+    const shape = coinShape({ diameter: 40, thickness: 5 }, { width: 4, depth: 8, boardDistance: null });
     expect(shape.stands).toBe(false);
     expect(Math.min(...shape.corners.map(([, y]) => y))).toBe(8);
   });
 
   test('finds room above the rail, to scale with it', () => {
-    const sizes = { railWidth: 1.25, railThickness: 0.75, width: 0.15, depth: 0.25, passes: [] };
+    const sizes = { railWidth: 1.25, railThickness: 0.75, width: 0.15, depth: 0.25, passes: [], boardDistance: null };
     const shape = coinShape({ diameter: 1.75, thickness: 0.125 }, sizes);
     const scale = scaleForCoin(sizes, shape, { above: 160, beside: 170 });
     const view = sectionView(sizes, { middle: 180, span: 160, top: 180, most: scale });
