@@ -63,6 +63,8 @@ export default defineNuxtConfig({
   nitro: {
     // Scripts and styles lie compressed beside the plain ones; pages are compressed by server/plugins/compress.ts.
     compressPublicAssets: { gzip: true, brotli: true },
+    // pdfkit has an older one of its own: beside it as packages the two would be mixed up in the built server.
+    externals: { inline: ['@noble/hashes'] },
     typescript: { tsConfig: { compilerOptions: exact } },
     // Part of the built server, which runs from any folder.
     virtual: {

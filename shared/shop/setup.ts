@@ -34,7 +34,8 @@ function clock(seconds: number): string {
   return `${Math.floor(whole / 60)}:${String(whole % 60).padStart(2, '0')}`;
 }
 
-const grouped = (value: number) => String(value).replaceAll(/(?<=\d)(?=(?:\d{3})+$)/g, '\u00a0'); // 16 000
+/** A speed with its thousands apart: `16 000`. */
+export const grouped = (value: number): string => String(value).replaceAll(/(?<=\d)(?=(?:\d{3})+$)/g, '\u00a0');
 
 /** The stock and all that is set before the program runs. */
 export function setupLines({ spec, summary, bit, holding, machine }: BenchProgram): readonly SetupLine[] {

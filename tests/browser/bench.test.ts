@@ -5,6 +5,7 @@ import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { ROUTER_CAUTIONS } from '#shared/shop/cautions';
 import { launch } from '../support/browser';
 import { type Caller, demoSignIns, signInAs } from '../support/people';
+import { pagesOf } from '../support/pdf';
 import { type RunningServer, startServer } from '../support/server';
 
 /** From sign-in to a logged cut, ms of steps: what the issue allows a person. */
@@ -27,9 +28,9 @@ interface AtBench {
   readonly context: BrowserContext;
   readonly complaints: readonly string[];
 }
-async function signIn(page: Page, role: 'hand' | 'owner'): Promise<void> {
+async function signIn(page: Page, role: 'hand' | 'owner', url = server.url): Promise<void> {
   const person = demoSignIns(server.folder).find((one) => one.role === role);
-  await page.goto(`${server.url}/sign-in?to=/bench`, { waitUntil: 'networkidle' });
+  await page.goto(`${url}/sign-in?to=/bench`, { waitUntil: 'networkidle' });
   await page.getByLabel('E-mail').fill(person?.email ?? '');
   await page.getByLabel('Password').fill(person?.password ?? '');
   await page.getByRole('button', { name: 'Sign in', exact: true }).click();
@@ -228,6 +229,32 @@ describe('the bench, as the shop hand', () => {
     await page.goto(`${server.url}/bench?rail=gone`);
     await page.getByText('That rail is not to be cut today').waitFor();
     await context.close();
+  });
+
+  test('the worker is the bench\'s alone, and over plain HTTP on the shop\'s network the bench says why there is none', async () => {
+    const context = await browser.newContext();
+    const page = await context.newPage();
+    await page.goto(server.url, { waitUntil: 'networkidle' });
+    expect(await page.evaluate(async () => (await navigator.serviceWorker.getRegistrations()).length)).toBe(0);
+    await context.close();
+
+    const elsewhere = await launch({ webgl: false, hosts: 'MAP tallyrail.test 127.0.0.1' });
+    const there = await elsewhere.newPage();
+    await signIn(there, 'hand', server.url.replace('127.0.0.1', 'tallyrail.test'));
+    await there.locator('.rail').first().waitFor();
+    expect(await there.evaluate(() => window.isSecureContext)).toBe(false);
+    expect(await there.locator('.news').textContent()).toContain('Without a network this page does not open here: the address begins with http');
+    await elsewhere.close();
+  });
+
+  test('the setup sheet comes as a PDF', async () => {
+    const { rails } = await owner.get('/api/bench/today');
+    for (const paper of ['letter', 'a4']) {
+      const answer = await owner.call('GET', `/api/rails/${rails[0].id}/sheet.pdf?paper=${paper}`);
+      expect(answer.headers.get('content-type')).toBe('application/pdf');
+      expect(pagesOf(Buffer.from(await answer.arrayBuffer()))).toHaveLength(1);
+    }
+    expect((await owner.call('GET', `/api/rails/${rails[0].id}/sheet.pdf?paper=a5`)).status).toBe(422);
   });
 
   test.each([[1180, 820, 'light'], [820, 1180, 'dark'], [390, 844, 'light']] as const)('%i × %i %s: axe finds nothing, nothing scrolls sideways, targets are 64 px', async (width, height, colorScheme) => {

@@ -12,10 +12,14 @@ const FLAGS = [
 const WITH_WEBGL = ['--use-gl=angle', '--use-angle=swiftshader', '--enable-unsafe-swiftshader'];
 const WITHOUT_WEBGL = ['--disable-gpu', '--disable-webgl', '--disable-webgl2', '--disable-3d-apis', '--disable-software-rasterizer'];
 
-/** Chromium as the tests use it; an error says how to get it rather than a test being skipped. */
-export async function launch({ webgl = true } = {}): Promise<Browser> {
+/**
+ * Chromium as the tests use it; an error says how to get it rather than a test being skipped.
+ *
+ * @param hosts names that lead elsewhere, as Chromium's host rules write them.
+ */
+export async function launch({ webgl = true, hosts = '' } = {}): Promise<Browser> {
   if (!existsSync(EXECUTABLE)) throw new Error(`There is no Chromium at ${EXECUTABLE}. Run: apt-get install -y chromium, or set CHROMIUM_PATH.`);
-  return chromium.launch({ executablePath: EXECUTABLE, args: [...FLAGS, ...(webgl ? WITH_WEBGL : WITHOUT_WEBGL)] });
+  return chromium.launch({ executablePath: EXECUTABLE, args: [...FLAGS, ...(hosts ? [`--host-resolver-rules=${hosts}`] : []), ...(webgl ? WITH_WEBGL : WITHOUT_WEBGL)] });
 }
 
 export interface OpenPage {
