@@ -2,6 +2,7 @@ import { benchCutLength } from './cutLength';
 import { benchCore } from './core';
 import { benchHttp } from './http';
 import { benchReader } from './readerVsParser';
+import { benchScale } from './scale';
 
 // Every figure here is a ratio or comes with one: absolute times belong to the machine they were taken on.
 
@@ -17,6 +18,9 @@ console.table(benchCutLength());
 
 console.log('\nPOST /api/programs against an empty route of the same server');
 console.table([await benchHttp()]);
+
+console.log('\nLists and look-ups with 100 000 programs and 1000 rails, against 100 and 10');
+console.table(await benchScale());
 
 function round(value: number): number {
   return Math.round(value * 100) / 100;
