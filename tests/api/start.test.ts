@@ -1,9 +1,11 @@
 import { spawn, spawnSync } from 'node:child_process';
-import { mkdtempSync, rmSync } from 'node:fs';
+import { mkdtempSync, readFileSync, rmSync } from 'node:fs';
+import { request } from 'node:https';
 import { type AddressInfo, createServer } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
+import { newCaller } from '../support/people';
 import { ROOT } from '../support/server';
 
 let folder: string;
@@ -11,8 +13,8 @@ beforeEach(() => (folder = mkdtempSync(join(tmpdir(), 'tallyrail-'))));
 afterEach(() => rmSync(folder, { recursive: true, force: true }));
 
 /** Runs `npm start`'s program until `work` is done with what it printed. */
-async function start(port: string, work: (address: string, said: string) => Promise<void>) {
-  const child = spawn(process.execPath, ['server/cli/start.mjs'], { cwd: ROOT, env: { ...process.env, PORT: port, TALLYRAIL_DATA: folder } });
+async function start(port: string, work: (address: string, said: string) => Promise<void>, args: readonly string[] = []) {
+  const child = spawn(process.execPath, ['server/cli/start.mjs', ...args], { cwd: ROOT, env: { ...process.env, PORT: port, TALLYRAIL_DATA: folder } });
   const ended = new Promise<number | null>((resolve) => child.once('exit', resolve));
   let said = '';
   try {
@@ -82,5 +84,33 @@ describe('npm start', () => {
 
   it('says what is wrong with a port that is none', async () => {
     await expect(start('abc', async () => {})).rejects.toThrow('PORT is abc. Use a number from 1 to 65535.');
+  });
+
+  it('prints sign-ins that work, for owner, shop hand and customer', async () => {
+    const { port, free } = await takenPort();
+    await free();
+    await start(String(port), async (address, said) => {
+      const signIns = [...said.matchAll(/(Owner|Shop hand|Customer): (\S+) {2}(\S+)/g)];
+      expect(signIns.map(([, role]) => role)).toEqual(['Owner', 'Shop hand', 'Customer']);
+      for (const [, , email = '', password = ''] of signIns) await newCaller(address).send('POST', '/api/account/sign-in', { email, password });
+    });
+  });
+
+  it('with --https serves the network with a certificate that names where it is reached, and a cookie for https alone', async () => {
+    const { port, free } = await takenPort();
+    await free();
+    await start(String(port), async (address, said) => {
+      expect(address).toMatch(/^https:/);
+      const ca = readFileSync(/shop's own: (\S+)/.exec(said)?.[1] ?? '');
+      const [, email = '', password = ''] = /Owner: (\S+) {2}(\S+)/.exec(said) ?? [];
+      const cookie = await new Promise<string>((resolve, reject) => {
+        const asked = request({ host: '127.0.0.1', port, path: '/api/account/sign-in', method: 'POST', ca, headers: { 'content-type': 'application/json' } }, (answer) => {
+          answer.resume();
+          resolve((answer.headers['set-cookie'] ?? []).join('; '));
+        });
+        asked.once('error', reject).end(JSON.stringify({ email, password }));
+      });
+      expect(cookie).toMatch(/tallyrail=.*; HttpOnly; Secure; SameSite=Lax/);
+    }, ['--https']);
   });
 });
