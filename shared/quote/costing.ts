@@ -1,5 +1,5 @@
 import type { CurrencyCode } from '../money/currency';
-import { type Money, byRatio, minus, money, percentOf, plus, sum, times } from '../money/money';
+import { type Money, byRatio, minus, money, percentOf, plus, sum } from '../money/money';
 import type { ShopProblem } from '../shop/fields';
 import type { BuyingPlan } from '../wood/buying';
 import { type Taken, correctionOf } from './correction';
@@ -20,6 +20,7 @@ export interface CostLine {
   /** How many of the unit the rate is for: 60 where minutes are paid by the hour. */
   readonly per: number;
   readonly amount: Money;
+  readonly taxed: boolean;
   readonly from: Source;
 }
 
@@ -92,7 +93,7 @@ const hundredths = (quantity: number) => Math.round(quantity * 100 + 1e-9) / 100
 
 function lineOf(group: CostGroup, { words, quantity, unit, rate }: Item, from: Source, per = 1): CostLine {
   const shown = hundredths(quantity);
-  return { group, words, quantity: shown, unit, rate, per, amount: byRatio(rate, shown, per), from };
+  return { group, words, quantity: shown, unit, rate, per, amount: byRatio(rate, shown, per), taxed: true, from };
 }
 
 /** Minutes paid by the hour. */
@@ -109,7 +110,8 @@ export function costLines({ currency, wood, machine, labour, finish, hardware, f
       const correction = correctionOf(history);
       return minutesOf('labour', step, minutes * correction.ratio, labour.hourly, { kind: 'labour', correction });
     }),
-    ...finish.map(own('finish')), ...hardware.map(own('hardware')), ...fees.map(own('fees')),
+    ...finish.map(own('finish')), ...hardware.map(own('hardware')),
+    ...fees.map((fee) => ({ ...own('fees')(fee), taxed: fee.taxed })),
   ];
 }
 
@@ -129,7 +131,7 @@ function problemsOf({ wood, machine, asked }: CostingInput, margin: Money): Shop
 export function costPiece(input: CostingInput): Costing {
   const { currency, overheadPercent, marginPercent, rushPercent, asked, tax } = input;
   const lines = costLines(input);
-  const of = (group: (line: CostLine) => boolean) => sum(lines.filter(group).map(({ amount }) => amount), currency);
+  const of = (which: (line: CostLine) => boolean) => sum(lines.filter(which).map(({ amount }) => amount), currency);
   const cost = of(({ group }) => group !== 'fees');
   const overhead = percentOf(cost, overheadPercent);
   const spent = plus(cost, overhead);
@@ -138,8 +140,7 @@ export function costPiece(input: CostingInput): Costing {
   const rush = percentOf(price, rushPercent);
   const fees = of(({ group }) => group === 'fees');
   const net = sum([price, rush, fees], currency);
-  const feesTaxed = sum(input.fees.filter(({ taxed }) => taxed).map(({ quantity, rate }) => times(rate, hundredths(quantity))), currency);
-  const taxable = sum([price, rush, feesTaxed], currency);
+  const taxable = sum([price, rush, of(({ group, taxed }) => group === 'fees' && taxed)], currency);
   const taxed = percentOf(taxable, tax.percent);
   return { lines, cost, overhead, margin, price, rush, fees, net, taxable, tax: taxed, total: plus(net, taxed), problems: problemsOf(input, margin) };
 }
