@@ -57,7 +57,7 @@ export async function type(page: Page, field: string, text: string): Promise<voi
 /** Waits until what is typed has been made and read back (or refused). */
 export async function settle(page: Page): Promise<void> {
   await page.waitForTimeout(50); // a keystroke reaches the page
-  await page.locator('main[aria-busy="false"]').waitFor({ state: 'attached' });
+  await page.locator('.rail[aria-busy="false"]').waitFor({ state: 'attached' });
 }
 
 export const mark = async (page: Page): Promise<string> => ((await page.locator('[data-mark]').textContent()) ?? '').trim();
