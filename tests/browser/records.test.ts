@@ -165,7 +165,9 @@ describe('the owner', () => {
     await page.getByRole('alertdialog').getByRole('button', { name: 'Put it in' }).click();
     await page.getByText('0 minutes').waitFor();
     expect((await get(`/api/bits/${bitId}`)).spec.acceptedDiameter).toBeNull();
+    await page.getByText('No width measured with it yet').waitFor();
     expect(await page.locator('main').innerText()).toContain('Accepted so far');
+    expect(await page.getByText('in use', { exact: true }).count()).toBe(0);
     const refused = await context.request.post(`${server.url}/api/bits/${bitId}/correction`, { data: { measurements: ['first-off-of-two-widths:1'] } });
     expect(refused.status()).toBe(409);
     expect((await context.request.post(`${server.url}/api/bits/${bitId}/correction`, { data: { measurements: [] } })).status()).toBe(422);
