@@ -60,11 +60,16 @@ export function putInPlace(folder: string, copy: string): void {
   copyFileSync(copy, file);
 }
 
+/** A write that is ready to run. */
+export interface Write {
+  readonly run: () => unknown;
+}
+
 /**
  * Runs some writes, all of them or none, in their order. What a later one needs to know is decided before: that is
  * what a driver whose database is elsewhere can do as well.
  */
-export async function allOrNothing(database: ShopDatabase, writes: readonly { readonly run: () => unknown }[]): Promise<void> {
+export async function allOrNothing(database: ShopDatabase, writes: readonly Write[]): Promise<void> {
   database.transaction(() => writes.forEach((write) => write.run()), { behavior: 'immediate' });
 }
 

@@ -17,6 +17,7 @@ export const programs = sqliteTable('programs', {
 
 export * from './schema/people'; // shops, people, passkeys, tokens
 export * from './schema/records'; // machines, bits, their corrections, own woods
+export * from './schema/commissions'; // commissions, their pieces' revisions, what was made and ticked
 export * from './schema/rails'; // rails, their revisions, their programs
 export * from './schema/cuts'; // cuts, deeds
 export * from './schema/mail'; // the mail queue

@@ -3,6 +3,7 @@ import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { eq } from 'drizzle-orm';
 import { assert } from '#shared/assert';
+import { workRevisionSchema } from '#shared/commission/work';
 import { makeProgram } from '#shared/makeProgram';
 import { bitSchema } from '#shared/shop/bit';
 import { prepareRail } from '#shared/shop/forMachine';
@@ -11,11 +12,13 @@ import { railSchema } from '#shared/shop/rail';
 import { allOrNothing } from '../db/client';
 import { people, shops } from '../db/schema';
 import { useDatabase } from '../db/shop';
+import { type Actor, changeCommission, createCommission, findCommission } from '../services/commissions';
+import { made, saveWork } from '../services/pieceRevisions';
 import { keepRailProgram, recordsFor } from '../services/railPrograms';
-import { createRail, findRail } from '../services/rails';
+import { findRail, newRail } from '../services/rails';
 import { shopBits, shopMachines } from '../services/records';
 import { newId } from '../utils/newId';
-import { DEMO_BITS, DEMO_MACHINE, DEMO_PEOPLE, DEMO_RAILS, DEMO_SHOP } from './scenario';
+import { DEMO_BITS, DEMO_COMMISSIONS, DEMO_MACHINE, DEMO_PEOPLE, DEMO_RAILS, DEMO_SHOP } from './scenario';
 
 /** Passwords made for this installation, for `npm start` to print; readable by its owner alone. */
 export const SIGN_INS = 'demo-sign-ins.json';
@@ -43,9 +46,11 @@ export async function seedDemo(folder: string): Promise<void> {
   const chosen = { machineId, bitId: bitIds[0] ?? '', holding: 2, woodId: null };
   const records = await recordsFor(shopId, chosen);
   assert(!('missing' in records), 'the demo has its machine and its bits');
-  for (const { request, quantity, dueIn, program } of DEMO_RAILS) {
-    const due = new Date(now.getTime() + dueIn * DAY).toISOString().slice(0, 10);
-    const rail = await findRail(shopId, await createRail(owner, railSchema.parse({ request, quantity, due })));
+  const commissionIds = await seedCommissions(owner, now);
+  for (const { request, quantity, dueIn, program, of: [place, label] } of DEMO_RAILS) {
+    const drawn = newRail(owner, railSchema.parse({ request, quantity, due: dayFrom(now, dueIn) }), { commissionId: commissionIds[place] ?? '', label });
+    await allOrNothing(database, drawn.writes);
+    const rail = await findRail(shopId, drawn.id);
     if (!program || !rail) continue;
     const prepared = prepareRail(request, records);
     assert(prepared.ok, `the demo's rails can be cut: ${prepared.ok ? '' : JSON.stringify(prepared.problems)}`);
@@ -53,6 +58,25 @@ export async function seedDemo(folder: string): Promise<void> {
     assert(made.ok, "the demo's programs agree with their drawings");
     await keepRailProgram(owner, rail, made, chosen, records);
   }
+}
+
+const dayFrom = (now: Date, days: number) => new Date(now.getTime() + days * DAY).toISOString().slice(0, 10);
+
+/** The demo's commissions with their pieces, moved to where they stand; their rails count as made. */
+async function seedCommissions(owner: Actor, now: Date): Promise<string[]> {
+  const ids: string[] = [];
+  for (const { asked, dueIn, stages: [first, ...later], work } of DEMO_COMMISSIONS) {
+    const id = await createCommission(owner, { ...asked, due: dayFrom(now, dueIn) }, dayFrom(now, first?.[1] ?? 0));
+    for (const [stage, day] of later) {
+      const commission = await findCommission(owner.shopId, id);
+      assert(commission, 'the demo has its commissions');
+      await changeCommission(owner, commission, { stage }, dayFrom(now, day));
+    }
+    assert(await saveWork(owner, { id, name: asked.name }, workRevisionSchema.parse({ work, basedOn: 0 })) === 1, "the demo's pieces are saved once");
+    await allOrNothing(useDatabase(), [made(owner, id, 'rails', 1)]);
+    ids.push(id);
+  }
+  return ids;
 }
 
 /** Live mode takes no folder that a demo has filled: its people's passwords were printed. */

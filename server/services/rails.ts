@@ -2,7 +2,7 @@ import { and, desc, eq, isNull } from 'drizzle-orm';
 import type { z } from 'zod';
 import type { ListQuery } from '#shared/shop/list';
 import type { railPatchSchema, railSchema, revisionSchema } from '#shared/shop/rail';
-import { allOrNothing, isTaken } from '../db/client';
+import { type Write, allOrNothing, isTaken } from '../db/client';
 import { people, railRevisions, rails } from '../db/schema';
 import { useDatabase } from '../db/shop';
 import { newId } from '../utils/newId';
@@ -18,7 +18,8 @@ const SHAPE: ListShape = {
   id: rails.id, shopId: rails.shopId, sorts: { name: rails.name, updated: rails.updatedAt }, first: ['updated', 'desc'], search: rails.name, status: rails.status,
 };
 const columns = {
-  id: rails.id, name: rails.name, status: rails.status, revision: rails.revision, wood: rails.wood, quantity: rails.quantity, due: rails.due, updatedAt: rails.updatedAt,
+  id: rails.id, name: rails.name, status: rails.status, revision: rails.revision, wood: rails.wood, quantity: rails.quantity, due: rails.due,
+  commissionId: rails.commissionId, label: rails.label, updatedAt: rails.updatedAt,
 };
 const own = (shopId: string, id: string) => and(eq(rails.shopId, shopId), eq(rails.id, id), isNull(rails.archivedAt));
 
@@ -46,39 +47,60 @@ export async function revisionsOf(shopId: string, railId: string) {
 /** What a list calls a rail whose drawing has no name. */
 const nameOf = (name: string) => name.trim() || 'Rail without a name';
 
-export async function createRail(by: Actor, { draft, request, quantity, due, note }: z.output<typeof railSchema>): Promise<string> {
+type NewRail = z.output<typeof railSchema>;
+/** The piece that a rail belongs to, and which of its rails it is. */
+interface OfPiece {
+  readonly commissionId: string;
+  readonly label: string;
+}
+
+/** The writes that make a new rail, for who has more to write with them. */
+export function newRail(by: Actor, { draft, request, quantity, due, note }: NewRail, of: OfPiece | null = null): { readonly id: string; readonly writes: readonly Write[] } {
   const database = useDatabase();
   const [id, now] = [newId(), new Date()];
   const name = nameOf(request.slot.spec.name);
-  await allOrNothing(database, [
-    database.insert(rails).values({ id, shopId: by.shopId, name, status: 'draft', revision: 1, wood: request.slot.spec.wood, quantity, due, createdAt: now, updatedAt: now }),
-    database.insert(railRevisions).values({ id: newId(), shopId: by.shopId, railId: id, number: 1, draft, request: request.input, note, savedBy: by.id, savedAt: now }),
-    deed(by, 'drew rail', name),
-  ]);
+  return {
+    id,
+    writes: [
+      database.insert(rails).values({ id, shopId: by.shopId, name, status: 'draft', revision: 1, wood: request.slot.spec.wood, quantity, due, ...of, createdAt: now, updatedAt: now }),
+      database.insert(railRevisions).values({ id: newId(), shopId: by.shopId, railId: id, number: 1, draft, request: request.input, note, savedBy: by.id, savedAt: now }),
+      deed(by, 'drew rail', name),
+    ],
+  };
+}
+
+export async function createRail(by: Actor, rail: NewRail): Promise<string> {
+  const { id, writes } = newRail(by, rail);
+  await allOrNothing(useDatabase(), writes);
   return id;
 }
 
+/** The writes that make a rail's next revision; a rail that was ready is a draft again, since its program is of an older one. */
+export function newRevision(by: Actor, railId: string, number: number, { draft, request, note }: Pick<NewRail, 'draft' | 'request' | 'note'>): readonly Write[] {
+  const database = useDatabase();
+  const now = new Date();
+  const name = nameOf(request.slot.spec.name);
+  return [
+    database.insert(railRevisions).values({ id: newId(), shopId: by.shopId, railId, number, draft, request: request.input, note, savedBy: by.id, savedAt: now }),
+    database.update(rails).set({ name, status: 'draft', revision: number, wood: request.slot.spec.wood, updatedAt: now }).where(own(by.shopId, railId)),
+    deed(by, `saved revision ${number} of rail`, name),
+  ];
+}
+
 /**
- * Saves a rail's next revision; a rail that was ready is a draft again, since its program is of an older one.
+ * Saves a rail's next revision.
  *
  * @returns its number, or null where somebody saved one meanwhile: nothing is overwritten.
  */
-export async function saveRevision(by: Actor, rail: { readonly id: string; readonly revision: number }, { draft, request, note, basedOn }: z.output<typeof revisionSchema>): Promise<number | null> {
+export async function saveRevision(by: Actor, rail: { readonly id: string; readonly revision: number }, { basedOn, ...drawn }: z.output<typeof revisionSchema>): Promise<number | null> {
   if (basedOn !== rail.revision) return null;
-  const database = useDatabase();
-  const [number, now] = [basedOn + 1, new Date()];
-  const name = nameOf(request.slot.spec.name);
   try {
-    await allOrNothing(database, [
-      database.insert(railRevisions).values({ id: newId(), shopId: by.shopId, railId: rail.id, number, draft, request: request.input, note, savedBy: by.id, savedAt: now }),
-      database.update(rails).set({ name, status: 'draft', revision: number, wood: request.slot.spec.wood, updatedAt: now }).where(own(by.shopId, rail.id)),
-      deed(by, `saved revision ${number} of rail`, name),
-    ]);
+    await allOrNothing(useDatabase(), newRevision(by, rail.id, basedOn + 1, drawn));
   } catch (error) {
     if (isTaken(error)) return null;
     throw error;
   }
-  return number;
+  return basedOn + 1;
 }
 
 /** Changes what is no part of the drawing. */
@@ -90,8 +112,11 @@ export async function changeRail(by: Actor, rail: { readonly id: string; readonl
   ]);
 }
 
-/** Puts a rail away: its revisions, programs and cuts stay. */
+/** The writes that put a rail away: its revisions, programs and cuts stay. */
+export const railAway = (by: Actor, rail: { readonly id: string; readonly name: string }): readonly Write[] => [
+  useDatabase().update(rails).set({ archivedAt: new Date() }).where(own(by.shopId, rail.id)), deed(by, 'put rail away', rail.name),
+];
+
 export async function archiveRail(by: Actor, rail: { readonly id: string; readonly name: string }): Promise<void> {
-  const database = useDatabase();
-  await allOrNothing(database, [database.update(rails).set({ archivedAt: new Date() }).where(own(by.shopId, rail.id)), deed(by, 'put rail away', rail.name)]);
+  await allOrNothing(useDatabase(), railAway(by, rail));
 }

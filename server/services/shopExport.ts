@@ -4,6 +4,7 @@ import type { ListQuery } from '#shared/shop/list';
 import { railPrograms } from '../db/schema';
 import { useDatabase } from '../db/shop';
 import { csvOf, flat } from '../utils/answerList';
+import { listCommissions } from './commissions';
 import { listCuts } from './cuts';
 import { deedsOf } from './deeds';
 import { listRailPrograms } from './railPrograms';
@@ -17,7 +18,7 @@ const ALL: ListQuery = { q: '', limit: BATCH, format: 'csv' };
 type List = (shopId: string, query: ListQuery) => Promise<{ readonly rows: readonly object[]; readonly next: string | null }>;
 
 const LISTS: Readonly<Record<string, List>> = {
-  'rails.csv': listRails, 'programs.csv': listRailPrograms, 'cuts.csv': listCuts, 'log.csv': deedsOf,
+  'commissions.csv': listCommissions('owner'), 'rails.csv': listRails, 'programs.csv': listRailPrograms, 'cuts.csv': listCuts, 'log.csv': deedsOf,
   'machines.csv': shopMachines.list, 'bits.csv': shopBits.list, 'woods.csv': shopWoods.list,
 };
 

@@ -29,6 +29,7 @@ export async function answerList<Row extends object>(event: H3Event, name: strin
 /** Rows as CSV (RFC 4180), its columns those of all rows; no cell can act as a formula. */
 export function csvOf(rows: readonly Readonly<Record<string, string>>[]): string {
   const columns = [...new Set(rows.flatMap((row) => Object.keys(row)))];
+  if (columns.length === 0) return ''; // an empty list has no columns to name
   return `${Papa.unparse([...rows], { columns, newline: '\r\n', escapeFormulae: FORMULA })}\r\n`;
 }
 

@@ -2,7 +2,7 @@ import { readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { ROUTES, routesAt } from '#server/access/table';
-import { DEMO_BITS, DEMO_MACHINE, DEMO_RAILS } from '#server/demo/scenario';
+import { DEMO_BITS, DEMO_COMMISSIONS, DEMO_MACHINE, DEMO_RAILS } from '#server/demo/scenario';
 import { type Caller, newCaller, openShop, secretMailedTo, signInAs } from '../support/people';
 import { ROOT, type RunningServer, startServer } from '../support/server';
 
@@ -19,7 +19,7 @@ beforeAll(async () => {
   [owner, hand, customer] = [await signInAs(server, 'owner'), await signInAs(server, 'hand'), await signInAs(server, 'customer')];
   stranger = await openShop(server.url, owner, 'Other shop');
   const first = async (path: string) => (await owner.get(path)).rows[0].id;
-  for (const name of ['machines', 'bits', 'rails']) ids[name] = await first(`/api/${name}`);
+  for (const name of ['machines', 'bits', 'rails', 'commissions']) ids[name] = await first(`/api/${name}`);
   ids.programs = await first('/api/shop/programs');
   ids.woods = (await owner.send('POST', '/api/woods', WOOD)).id;
   ids.people = (await owner.get('/api/people')).people.find(({ role }: { readonly role: string }) => role === 'hand').id;
@@ -36,6 +36,9 @@ const BODIES: Readonly<Record<string, () => unknown>> = {
   'POST /api/bits': () => DEMO_BITS[0], 'PUT /api/bits/{id}': () => DEMO_BITS[0],
   'POST /api/woods': () => WOOD, 'PUT /api/woods/{id}': () => WOOD,
   'POST /api/rails': () => ({ request: rail?.request }), 'PUT /api/rails/{id}': () => ({ request: rail?.request, basedOn: 1 }), 'PATCH /api/rails/{id}': () => ({ quantity: 2 }),
+  'POST /api/commissions': () => DEMO_COMMISSIONS[0]?.asked, 'PATCH /api/commissions/{id}': () => ({ wishes: 'Another' }),
+  'POST /api/commissions/{id}/revisions': () => ({ work: DEMO_COMMISSIONS[0]?.work, basedOn: 1 }), 'POST /api/commissions/{id}/rails': () => ({ revision: 1 }),
+  'POST /api/commissions/{id}/made': () => ({ step: 'cutList' }), 'POST /api/commissions/{id}/ticks': () => ({ step: 'glue', done: true }),
   'POST /api/rails/{id}/check': chosen, 'POST /api/rails/{id}/programs': chosen,
   'POST /api/cuts': () => ({ id: 'a-cut-of-the-test-1', programId: ids.programs, outcome: 'well', cutAt: new Date().toISOString() }),
   'PATCH /api/people/{id}': () => ({ status: 'active' }),
@@ -97,7 +100,7 @@ describe("another shop's people", () => {
   });
 
   it('see none of our rows in any list, search, export or log', async () => {
-    for (const path of ['/api/rails', '/api/machines', '/api/bits', '/api/woods', '/api/shop/programs', '/api/cuts']) expect((await stranger.get(path)).rows, path).toEqual([]);
+    for (const path of ['/api/rails', '/api/commissions', '/api/machines', '/api/bits', '/api/woods', '/api/shop/programs', '/api/cuts']) expect((await stranger.get(path)).rows, path).toEqual([]);
     const { mark } = (await owner.get('/api/shop/programs')).rows[0];
     expect((await stranger.get(`/api/shop/programs?q=${mark}`)).rows).toEqual([]);
     expect((await stranger.get('/api/people')).people).toHaveLength(1);

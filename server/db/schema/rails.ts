@@ -1,3 +1,4 @@
+import { sql } from 'drizzle-orm';
 import { index, integer, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core';
 import type { ProgramSummary } from '#shared/makeProgram';
 import type { Readback } from '#shared/readback/finding';
@@ -7,6 +8,7 @@ import { RAIL_STATUSES } from '#shared/shop/railStatus';
 import type { SlotRequestInput } from '#shared/slot/request';
 import type { SlotSpec } from '#shared/slot/spec';
 import { id, time } from './columns';
+import { commissions } from './commissions';
 import { people, shops } from './people';
 import { bits, machines } from './records';
 
@@ -24,6 +26,9 @@ export const rails = sqliteTable('rails', {
   quantity: integer('quantity').notNull().default(1),
   /** Day it has to be cut by, `2026-12-18`. */
   due: text('due'),
+  /** The commission whose piece it is of, and which of its rails: A, B, C. Null: a rail by itself. */
+  commissionId: text('commission_id').references(() => commissions.id),
+  label: text('label'),
   createdAt: time('created_at').notNull(),
   updatedAt: time('updated_at').notNull(),
   archivedAt: time('archived_at'),
@@ -31,6 +36,7 @@ export const rails = sqliteTable('rails', {
   index('rails_shop').on(table.shopId, table.updatedAt),
   index('rails_status').on(table.shopId, table.status),
   index('rails_name').on(table.shopId, table.name),
+  uniqueIndex('rails_label').on(table.commissionId, table.label).where(sql`archived_at IS NULL`),
 ]);
 
 /** Each save of a rail; none is ever changed. */
