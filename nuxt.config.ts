@@ -30,6 +30,9 @@ export default defineNuxtConfig({
   // Whether the cookie may travel without https is decided for each session (server/access/person.ts).
   runtimeConfig: { session: { name: 'tallyrail', maxAge: 60 * 60 * 24 * 30, cookie: { sameSite: 'lax', httpOnly: true, secure: false } } },
 
+  // Pages behind a link are fetched by whoever reaches for it, not by everyone who sees it.
+  experimental: { defaults: { nuxtLink: { prefetchOn: { visibility: false, interaction: true } } } },
+
   // TresJS draws its own elements; only its canvas is a component.
   vue: {
     compilerOptions: {

@@ -26,8 +26,9 @@ export async function answerList<Row extends object>(event: H3Event, name: strin
   return csvOf(rows);
 }
 
-/** Rows as CSV (RFC 4180), its columns those of all rows; no cell can act as a formula. */
+/** Rows as CSV (RFC 4180), its columns those of all rows; no cell can act as a formula. Without rows nothing says what columns there are: the file is empty. */
 export function csvOf(rows: readonly Readonly<Record<string, string>>[]): string {
+  if (rows.length === 0) return '';
   const columns = [...new Set(rows.flatMap((row) => Object.keys(row)))];
   if (columns.length === 0) return ''; // an empty list has no columns to name
   return `${Papa.unparse([...rows], { columns, newline: '\r\n', escapeFormulae: FORMULA })}\r\n`;

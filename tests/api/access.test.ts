@@ -80,6 +80,10 @@ describe('role × route', () => {
     const caller = callers()[role];
     for (const [name, who] of routes) {
       if (!name.startsWith('GET') || !who.some((one) => one === role) || name.endsWith('_auth/session')) continue;
+      for (const address of [addressOf(name.slice(4)), `${addressOf(name.slice(4))}?format=csv`]) {
+        const answer = await caller.call('GET', address);
+        expect(answer.status, `${role}: ${address} ${await answer.text()}`).toBeLessThan(500);
+      }
       const answer = await caller.call('GET', addressOf(name.slice(4)));
       const nothingThere = name.includes('{mark}') || name.endsWith('/backup'); // no such mark; two shops share the database
       expect(nothingThere ? [403, 404] : [200], `${role}: ${name} ${await answer.text()}`).toContain(answer.status);
