@@ -214,7 +214,7 @@ describe('for everyone, on every screen', () => {
       expect(violations.map(({ id: rule, nodes }) => `${rule}: ${nodes.map(({ target }) => target.join(' ')).join(', ')}`), path).toEqual([]);
     }
     await context.close();
-  });
+  }, 300_000); // ms: fourteen pages, each up to 7 s where the processor is shared
 
   it('nothing scrolls sideways', async () => {
     const { page, context } = await as('owner');
