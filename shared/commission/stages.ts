@@ -78,3 +78,12 @@ export function movedByHand(to: Stage, from: Stage, typed: string):
   if (reason.length > LONGEST_REASON) return { ok: false, problem: { field: 'reason', message: `The reason is too long. Use ${LONGEST_REASON} characters or fewer.` } };
   return { ok: true, reached: new Set(MILESTONES.slice(0, STAGES.indexOf(to))), reason };
 }
+
+/** The day, `2026-12-18`, on which each stage was entered, as far as known. */
+export type StageDays = Readonly<Partial<Record<Stage, string>>>;
+
+/** The days after a move to a stage: it is entered today, what lies before keeps its day, what lies after has none any more. */
+export function movedTo(days: StageDays, stage: Stage, today: string): StageDays {
+  const at = STAGES.indexOf(stage);
+  return { ...Object.fromEntries(STAGES.slice(0, at).flatMap((one) => (days[one] === undefined ? [] : [[one, days[one]]]))), [stage]: today };
+}
