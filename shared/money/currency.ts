@@ -5,9 +5,9 @@ import type { DineroCurrency } from 'dinero.js/bigint';
 export type CurrencyCode = keyof typeof iso;
 
 /** Ouguiya and ariary are divided by five, but ISO 4217 gives both two decimals, and so do banks. */
-const asWritten = <Code extends string>(code: Code): DineroCurrency<bigint, Code> => ({ code, base: 10n, exponent: 2n });
+const asWritten = (code: CurrencyCode): DineroCurrency<bigint> => ({ code, base: 10n, exponent: 2n });
 
-const CURRENCIES: Readonly<Record<CurrencyCode, DineroCurrency<bigint, CurrencyCode>>> = { ...iso, MGA: asWritten('MGA'), MRU: asWritten('MRU') };
+const CURRENCIES: Readonly<Record<CurrencyCode, DineroCurrency<bigint>>> = { ...iso, MGA: asWritten('MGA'), MRU: asWritten('MRU') };
 
 export const isCurrency = (code: string): code is CurrencyCode => Object.hasOwn(CURRENCIES, code);
 

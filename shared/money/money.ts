@@ -3,10 +3,10 @@ import { assert } from '../assert';
 import { type CurrencyCode, decimalsOf, definitionOf } from './currency';
 
 /** An amount in whole minor units (cents) of its currency. It is what is stored and sent: a number of cents, never a fraction of one. */
-export interface Money {
+export type Money = {
   readonly amount: number;
   readonly currency: CurrencyCode;
-}
+};
 
 /** Minor units either way that an amount may have: beyond any commission, and small enough that every cent is told apart when it is written out. */
 export const LARGEST = 1e13;
@@ -23,17 +23,17 @@ export const zero = (currency: CurrencyCode): Money => money(0, currency);
 
 const enter = ({ amount, currency }: Money) => dinero({ amount: BigInt(amount), currency: definitionOf(currency) });
 
-function leave(value: Dinero<bigint, CurrencyCode>): Money {
-  const { amount, currency, scale } = toSnapshot(value);
-  assert(Number(scale) === decimalsOf(currency.code), 'money leaves in whole minor units');
-  return money(Number(amount), currency.code);
+function leave(value: Dinero<bigint>, currency: CurrencyCode): Money {
+  const { amount, scale } = toSnapshot(value);
+  assert(Number(scale) === decimalsOf(currency), 'money leaves in whole minor units');
+  return money(Number(amount), currency);
 }
 
 /**
  * The one rounding rule of all money here: to the nearest minor unit, and a half away from zero, so that 0.5 cent is
  * 1 cent to pay and the refund of it the same. It is what a customer's calculator shows.
  */
-const rounded = (value: Dinero<bigint, CurrencyCode>, currency: CurrencyCode) => leave(transformScale(value, definitionOf(currency).exponent, halfAwayFromZero));
+const rounded = (value: Dinero<bigint>, currency: CurrencyCode) => leave(transformScale(value, definitionOf(currency).exponent, halfAwayFromZero), currency);
 
 function sameCurrency(a: Money, b: Money): void {
   assert(a.currency === b.currency, `${a.currency} and ${b.currency} are not reckoned together`);
@@ -41,12 +41,12 @@ function sameCurrency(a: Money, b: Money): void {
 
 export function plus(a: Money, b: Money): Money {
   sameCurrency(a, b);
-  return leave(add(enter(a), enter(b)));
+  return leave(add(enter(a), enter(b)), a.currency);
 }
 
 export function minus(a: Money, b: Money): Money {
   sameCurrency(a, b);
-  return leave(subtract(enter(a), enter(b)));
+  return leave(subtract(enter(a), enter(b)), a.currency);
 }
 
 /** All amounts together; nothing at all is zero of the currency. */
@@ -91,5 +91,5 @@ export function byRatio(amount: Money, numerator: number, denominator: number): 
 export function share(amount: Money, weights: readonly number[]): Money[] {
   const whole = weights.map(millionths);
   assert(whole.every((weight) => weight >= 0n) && whole.some((weight) => weight > 0n), 'weights are not below zero and one is above');
-  return allocate(enter(amount), whole).map(leave);
+  return allocate(enter(amount), whole).map((part) => leave(part, amount.currency));
 }

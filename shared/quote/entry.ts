@@ -10,11 +10,11 @@ export const METHODS = ['card', 'cash', 'transfer'] as const;
 export type Method = (typeof METHODS)[number];
 
 /** What every entry has. `id` is the provider's for what the provider did, and our own for the rest: an id is one deed. */
-interface Deed {
+type Deed = {
   readonly id: string;
   /** When it happened, milliseconds from 1970. */
   readonly at: number;
-}
+};
 
 /** An entry of a commission's ledger. Nothing is changed or struck out: what was wrong is taken back by a further entry. */
 export type Entry =
