@@ -4,6 +4,15 @@ import type { ShopProblem } from '../shop/fields';
 export const STAGES = ['enquiry', 'quoted', 'approved', 'deposit paid', 'wood bought', 'cutting', 'assembly', 'finishing', 'ready', 'delivered'] as const;
 export type Stage = (typeof STAGES)[number];
 
+/** A stage as a label shows it. */
+export const STAGE_WORDS: Readonly<Record<Stage, string>> = {
+  'enquiry': 'Enquiry', 'quoted': 'Quoted', 'approved': 'Approved', 'deposit paid': 'Deposit paid', 'wood bought': 'Wood bought',
+  'cutting': 'Cutting', 'assembly': 'Assembly', 'finishing': 'Finishing', 'ready': 'Ready', 'delivered': 'Delivered',
+};
+
+/** Whether a commission that stands at `current` has come to a stage. */
+export const hasReached = (stage: Stage, current: Stage): boolean => STAGES.indexOf(stage) <= STAGES.indexOf(current);
+
 /** A stage past the first: each is entered by one milestone, which bears its name. */
 export type Milestone = Exclude<Stage, 'enquiry'>;
 export const MILESTONES = STAGES.filter((stage): stage is Milestone => stage !== 'enquiry');

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { MILESTONES, type Milestone, type Reached, STAGES, STAGE_EVENTS, STAGE_MOVES, type StageEvent, aheadOf, moved, movedByHand, stageOf } from '#shared/commission/stages';
+import { MILESTONES, type Milestone, type Reached, STAGES, STAGE_EVENTS, STAGE_MOVES, type StageEvent, aheadOf, hasReached, moved, movedByHand, movedTo, stageOf } from '#shared/commission/stages';
 import { aheadWords } from '#shared/commission/stagesNow';
 
 const NONE: Reached = new Set<Milestone>();
@@ -77,5 +77,17 @@ describe('a stage set by hand', () => {
   ] as const)('to %s from %s because "%s" is refused', (to, from, reason, field, message) => {
     const answer = movedByHand(to, from, reason);
     expect(answer).toMatchObject({ ok: false, problem: { field, message: expect.stringMatching(message) } });
+  });
+});
+
+describe('the days of stages', () => {
+  it('are kept for what lies before, set for what is entered, and gone for what lies after', () => {
+    const days = { enquiry: '2026-12-01', quoted: '2026-12-02', cutting: '2026-12-09' };
+    expect(movedTo(days, 'approved', '2026-12-11')).toEqual({ enquiry: '2026-12-01', quoted: '2026-12-02', approved: '2026-12-11' });
+    expect(movedTo({}, 'enquiry', '2026-12-01')).toEqual({ enquiry: '2026-12-01' });
+  });
+
+  it('are of stages come to, the current one among them', () => {
+    expect(STAGES.filter((stage) => hasReached(stage, 'approved'))).toEqual(['enquiry', 'quoted', 'approved']);
   });
 });
