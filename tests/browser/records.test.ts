@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { readFileSync } from 'node:fs';
 import AxeBuilder from '@axe-core/playwright';
 import type { Browser, BrowserContext, Page } from 'playwright-core';
@@ -196,9 +197,15 @@ describe('the shop hand', () => {
 });
 
 describe('for everyone, on every screen', () => {
+  /** Every page with something on it: a wood of the shop's own, and a bit that was measured. */
   const pages = async (context: BrowserContext) => {
-    const id = async (path: string) => (await (await context.request.get(server.url + path)).json()).rows[0].id;
-    const [machine, bit, wood, program] = [await id('/api/machines'), await id('/api/bits'), await id('/api/woods'), await id('/api/shop/programs')];
+    const get = async (path: string) => (await context.request.get(server.url + path)).json();
+    const add = async (path: string, data: object) => expect((await context.request.post(server.url + path, { data })).status()).toBe(200);
+    const id = async (path: string) => (await get(path)).rows[0].id;
+    const [machine, program] = [await id('/api/machines'), await id('/api/shop/programs')];
+    await add('/api/woods', { units: 'in', name: 'Board 1', kind: 'hardwood', movesSeasonally: true });
+    await add('/api/cuts', { id: `to-be-looked-at-${randomUUID()}`, programId: program, outcome: 'well', seconds: 60, widths: [8.01, 8.02, 8], depths: [], cutAt: new Date().toISOString() });
+    const [wood, { bitId: bit }] = [await id('/api/woods'), await get(`/api/shop/programs/${program}`)];
     return [
       '/rails', '/machines', '/machines/new', `/machines/${machine}`, '/bits', '/bits/new', `/bits/${bit}`, '/woods?q=Board 1', '/woods/new', `/woods/${wood}`,
       '/programs', `/programs/${program}`, '/cuts', '/log?q=1',
