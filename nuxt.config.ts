@@ -76,11 +76,12 @@ export default defineNuxtConfig({
   },
 
   hooks: {
-    // The setup sheet stands in the page; its code is fetched by the first touch (useTouched), so nothing preloads it.
+    // What a page only fetches when it is asked for is not fetched before: most visitors ask for little of it.
     'build:manifest'(manifest) {
-      offline.note(manifest);
+      for (const chunk of Object.values(manifest)) if (chunk.isDynamicEntry) chunk.prefetch = false;
+      // The setup sheet stands in the page; its code is fetched by the first touch (useTouched), so nothing preloads it.
       const part = (path: string) => Object.values(manifest).find(({ src }) => src?.endsWith(path));
-      const needed = new Set(part('pages/index.vue')?.imports);
+      const needed = new Set(['pages/index.vue', 'Rail/RailSheets.vue'].flatMap((path) => part(path)?.imports ?? []));
       const sheet = part('Program/ProgramSetupSheet.vue');
       if (!sheet) return;
       sheet.preload = false;
