@@ -53,7 +53,7 @@ export const DEMO_COMMISSIONS: readonly DemoCommission[] = [
       contact: { customer: 'Station 9 Rescue Squad', person: 'Halvard Prewitt', email: 'halvard@station9.example.com', phone: '555-0109' },
     },
     dueIn: 17,
-    stages: [['enquiry', -28], ['quoted', -24], ['approved', -19], ['deposit', -15]],
+    stages: [['enquiry', -28], ['quoted', -24], ['approved', -19], ['deposit paid', -15]],
     work: {
       tally: { units: 'in', kinds: DAY_ROOM_KINDS.map(({ toCome: _none, ...kind }) => kind) }, toCome: [], piece: DAY_ROOM_PIECE, pins: [], build: DAY_ROOM_BUILD,
       surface: { colour: 'none', finish: 'drying-oil', coats: 3, coatHours: 1 }, gauge: 18,
