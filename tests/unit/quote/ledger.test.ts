@@ -35,6 +35,7 @@ describe('a ledger', () => {
     ['some of it back', [price, asked('balanceAsked'), paid('p1', 71_508), refunded('r1', 5000, 'p1')], [71_508, 66_508, 5000, 0, 5000]],
     ['a charge and a discount', [price, extra('charge', 'c1', 4000), extra('discount', 'd1', 1508), asked('balanceAsked')], [74_000, 0, 74_000, 0, 74_000]],
     ['a revised price', [price, paid('p1', 35_754), agreed(60_000, 30_000, 2)], [60_000, 35_754, 24_246, 0, 0]],
+    ['an older revision heard of last', [agreed(60_000, 30_000, 2), { kind: 'agreed', id: 'quote-1', at: 99, revision: 1, total: usd(71_508), deposit: usd(35_754) }], [60_000, 0, 60_000, 0, 0]],
     ['a revised price below what was paid', [price, paid('p1', 71_508), agreed(60_000, 30_000, 2), asked('balanceAsked')], [60_000, 71_508, 0, 11_508, 0]],
     ['a payment charged back', [price, asked('balanceAsked'), paid('p1', 71_508), back('p1')], [71_508, 0, 71_508, 0, 71_508]],
     ['a refund that failed', [price, paid('p1', 71_508), refunded('r1', 5000, 'p1'), back('r1')], [71_508, 71_508, 0, 0, 0]],
