@@ -31,7 +31,8 @@ export default defineNuxtConfig({
   runtimeConfig: { session: { name: 'tallyrail', maxAge: 60 * 60 * 24 * 30, cookie: { sameSite: 'lax', httpOnly: true, secure: false } } },
 
   // Pages behind a link are fetched by whoever reaches for it, not by everyone who sees it.
-  experimental: { defaults: { nuxtLink: { prefetchOn: { visibility: false, interaction: true } } } },
+  // No route has rules that a browser must know, so it fetches no list of them.
+  experimental: { appManifest: false, navigationRepaint: false, defaults: { nuxtLink: { prefetchOn: { visibility: false, interaction: true } } } },
 
   // TresJS draws its own elements; only its canvas is a component.
   vue: {
@@ -61,7 +62,10 @@ export default defineNuxtConfig({
   pwa: offline.options,
 
   // Nuxt's own data fetching is made at load by calls that look as if they did something: without use, without weight.
-  vite: { build: { rollupOptions: { treeshake: { moduleSideEffects: (id) => !/nuxt\/dist\/app\/composables\/(asyncData|fetch|component|preview)\.js/.test(id) } } } },
+  vite: {
+    define: { __VUE_OPTIONS_API__: 'false' }, // no component here, or in a package of ours, is written that way
+    build: { rollupOptions: { treeshake: { moduleSideEffects: (id) => !/nuxt\/dist\/app\/composables\/(asyncData|fetch|component|preview)\.js/.test(id) } } } ,
+  },
 
   nitro: {
     // Scripts and styles lie compressed beside the plain ones; pages are compressed by server/plugins/compress.ts.
@@ -78,7 +82,7 @@ export default defineNuxtConfig({
   hooks: {
     // What a page only fetches when it is asked for is not fetched before: most visitors ask for little of it.
     'build:manifest'(manifest) {
-      for (const chunk of Object.values(manifest)) if (chunk.isDynamicEntry) chunk.prefetch = false;
+      for (const chunk of Object.values(manifest)) chunk.prefetch = false;
       // The setup sheet stands in the page; its code is fetched by the first touch (useTouched), so nothing preloads it.
       const part = (path: string) => Object.values(manifest).find(({ src }) => src?.endsWith(path));
       const needed = new Set(['pages/index.vue', 'Rail/RailSheets.vue'].flatMap((path) => part(path)?.imports ?? []));
