@@ -83,15 +83,17 @@ export default defineNuxtConfig({
     // What a page only fetches when it is asked for is not fetched before: most visitors ask for little of it.
     'build:manifest'(manifest) {
       for (const chunk of Object.values(manifest)) chunk.prefetch = false;
-      // The setup sheet stands in the page; its code is fetched by the first touch (useTouched), so nothing preloads it.
+      // These stand in the page as it comes; their code is fetched by the first touch (useTouched), or once they are in sight.
       const part = (path: string) => Object.values(manifest).find(({ src }) => src?.endsWith(path));
       const needed = new Set(['pages/index.vue', 'Rail/RailSheets.vue'].flatMap((path) => part(path)?.imports ?? []));
-      const sheet = part('Program/ProgramSetupSheet.vue');
-      if (!sheet) return;
-      sheet.preload = false;
-      for (const id of sheet.imports ?? []) {
-        const chunk = manifest[id];
-        if (chunk && !chunk.isEntry && !needed.has(id)) chunk.preload = false;
+      for (const path of ['Program/ProgramSetupSheet.vue', 'Program/ProgramPanel.vue', 'Readback/ReadbackPanel.vue', 'Settings/SettingsPanel.vue', 'Drawing/DrawingSpeeds.vue']) {
+        const late = part(path);
+        if (!late) continue;
+        late.preload = false;
+        for (const id of late.imports ?? []) {
+          const chunk = manifest[id];
+          if (chunk && !chunk.isEntry && !needed.has(id)) chunk.preload = false;
+        }
       }
     },
     // Ours answers for /api; Nuxt's own then answers for pages.
