@@ -1,11 +1,11 @@
 import type { Units } from '../measure/units';
-import { PLANES } from './arc';
 import { readError } from './errors';
 import { type Machine, changeCut, changeModes } from './machine';
 import { gGroup, mGroup } from './modalGroups';
 import { AFTER_END, DEFAULTS } from './modes';
 import { move } from './move';
 import type { Modes, ReadError, Word } from './motion';
+import { PLANES } from './planes';
 import { AXES, type Letter, type Request, bitOf, findWord, gCode, has, isClose, isG, isM, mCode, placeOf, shown, valueOf } from './request';
 import { placeOfLine } from './scan';
 

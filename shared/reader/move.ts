@@ -1,5 +1,6 @@
 import type { Point3 } from '../geometry/point';
-import { PLANES, arcLength, centreArc, radiusArc } from './arc';
+import { arcLength, centreArc, radiusArc } from './arc';
+import { PLANES } from './planes';
 import { readError } from './errors';
 import type { Machine } from './machine';
 import { DEFAULTS } from './modes';

@@ -1,5 +1,5 @@
 import type { Point3 } from '../geometry/point';
-import { PLANES } from '../reader/arc';
+import { PLANES } from '../reader/planes';
 import type { ArcPath, Motion } from '../reader/motion';
 
 /** A point that is written into again and again, so that a frame of playback allocates nothing. */

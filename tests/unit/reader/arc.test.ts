@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Point3 } from '#shared/geometry/point';
-import { PLANES, arcLength, centreArc, radiusArc } from '#shared/reader/arc';
+import { arcLength, centreArc, radiusArc } from '#shared/reader/arc';
+import { PLANES } from '#shared/reader/planes';
 import type { ArcPath } from '#shared/reader/motion';
 
 const SEED = 6556;
