@@ -20,6 +20,7 @@ describe('the drawing is the form', () => {
 
   test('every keystroke that can be read redraws, and the program follows', async () => {
     const { page, context } = await openPage(browser, url);
+    await page.locator('tr[data-rule="depth"]').last().scrollIntoViewIfNeeded(); // the table follows once it is in sight
     const before = { mark: await mark(page), depth: await page.locator('tr[data-rule="depth"] .measured').last().textContent() };
     await type(page, 'depth', '1/4');
     await settle(page);
