@@ -31,8 +31,8 @@ export default defineNuxtConfig({
   runtimeConfig: { session: { name: 'tallyrail', maxAge: 60 * 60 * 24 * 30, cookie: { sameSite: 'lax', httpOnly: true, secure: false } } },
 
   // Pages behind a link are fetched by whoever reaches for it, not by everyone who sees it.
-  // No route has rules that a browser must know, so it fetches no list of them.
-  experimental: { appManifest: false, navigationRepaint: false, defaults: { nuxtLink: { prefetchOn: { visibility: false, interaction: true } } } },
+  // No page is made ahead of being asked for and no route has rules that a browser must know, so it carries no code for either.
+  experimental: { appManifest: false, checkOutdatedBuildInterval: false, navigationRepaint: false, payloadExtraction: false, defaults: { nuxtLink: { prefetchOn: { visibility: false, interaction: true } } } },
 
   // TresJS draws its own elements; only its canvas is a component.
   vue: {
@@ -83,10 +83,10 @@ export default defineNuxtConfig({
     // What a page only fetches when it is asked for is not fetched before: most visitors ask for little of it.
     'build:manifest'(manifest) {
       for (const chunk of Object.values(manifest)) chunk.prefetch = false;
-      // These stand in the page as it comes; their code is fetched by the first touch (useTouched), or once they are in sight.
+      // These stand in the page as it comes; their code is fetched by the first touch (useTouched), or never.
       const part = (path: string) => Object.values(manifest).find(({ src }) => src?.endsWith(path));
       const needed = new Set(['pages/index.vue', 'Rail/RailSheets.vue'].flatMap((path) => part(path)?.imports ?? []));
-      for (const path of ['Program/ProgramSetupSheet.vue', 'Program/ProgramPanel.vue', 'Readback/ReadbackPanel.vue', 'Settings/SettingsPanel.vue', 'Drawing/DrawingSpeeds.vue']) {
+      for (const path of ['Program/ProgramSetupSheet.vue', 'Program/ProgramPanel.vue', 'Readback/ReadbackPanel.vue', 'Settings/SettingsPanel.vue', 'Readback/ReadbackShort.vue', 'Page/PageCautions.vue']) {
         const late = part(path);
         if (!late) continue;
         late.preload = false;

@@ -1,7 +1,7 @@
 /** Turns true with the first sign of a hand on the page, or of a printer: what only then matters need not be fetched before. */
 export function useTouched() {
   const touched = ref(false);
-  const signs = ['pointerdown', 'pointermove', 'keydown', 'focusin', 'beforeprint', 'hashchange'] as const;
+  const signs = ['pointerdown', 'pointermove', 'keydown', 'focusin', 'scroll', 'wheel', 'beforeprint', 'hashchange'] as const;
   let printing: MediaQueryList | null = null;
   function touch(): void {
     touched.value = true;

@@ -1,15 +1,8 @@
-import type { Account } from '~/composables/useAccount';
+import { isLeaving } from '~/utils/leaving';
 
-/** Ends the session of whoever signed out at the bench while there was no network. */
+/** Somebody signed out at the bench while there was no network: their session ends now. Nearly nobody did, so the code for it comes only then. */
 export default defineNuxtPlugin(async () => {
   if (!isLeaving()) return;
-  try {
-    await call('/api/account/sign-out', { method: 'POST' });
-  } catch (error) {
-    if (!(error instanceof Error)) throw error;
-    return; // still no network: the next page tries again
-  }
-  noteLeaving(false);
-  // The page may have been made for who was still signed in.
-  if (useState<Account | null>('account').value?.person) reloadNuxtApp();
+  const { leave } = await import('~/utils/leave');
+  await leave(useAccount().account.value);
 });

@@ -1,7 +1,7 @@
+import { LEAVING } from './leaving';
+
 /** Whose day this browser keeps: their id, so that every page can tell without opening the store. */
 const KEPT_FOR = 'tallyrail.bench';
-/** Somebody signed out here without a network: their session ends as soon as there is one. */
-const LEAVING = 'tallyrail.leaving';
 /** What was ticked and measured so far of a rail begins with this. */
 export const PROGRESS = 'tallyrail.bench.';
 
@@ -22,7 +22,6 @@ const set = (name: string, value: string | null): void => {
 };
 
 export const noteKeptFor = (personId: string | null): void => set(KEPT_FOR, personId);
-export const isLeaving = (): boolean => read(LEAVING) !== null;
 export const noteLeaving = (leaving: boolean): void => set(LEAVING, leaving ? 'yes' : null);
 
 /** Forgets the kept day: at sign-out, and where somebody else signs in. Logged cuts stay until their own person is back. */

@@ -26,7 +26,7 @@ describe('the drawing is the form', () => {
     await settle(page);
     expect(await mark(page)).not.toBe(before.mark);
     expect(before.depth).toBe('0.1875');
-    expect(await page.locator('tr[data-rule="depth"] .measured').last().textContent()).toBe('0.2500');
+    await expect.poll(() => page.locator('tr[data-rule="depth"] .measured').last().textContent()).toBe('0.2500');
     await context.close();
   });
 
@@ -91,6 +91,7 @@ describe('the drawing is the form', () => {
     const { page, context } = await openPage(browser, url);
     await type(page, 'depth', '9 mm');
     await type(page, 'width', '0.3937');
+    await settle(page);
     const read = () => page.locator('[data-size] input').evaluateAll((inputs) => inputs.map((input) => (input as HTMLInputElement).value));
     const before = await read();
     const [mm, inches] = [page.locator('.segment input[value="mm"]'), page.locator('.segment input[value="fractions"]')];
