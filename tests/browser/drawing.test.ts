@@ -94,10 +94,10 @@ describe('the drawing is the form', () => {
     await settle(page);
     const read = () => page.locator('[data-size] input').evaluateAll((inputs) => inputs.map((input) => (input as HTMLInputElement).value));
     const before = await read();
-    const [mm, inches] = [page.locator('.segment input[value="mm"]'), page.locator('.segment input[value="fractions"]')];
+    const [mm, inches] = [page.locator('.segment label:has(input[value="mm"])'), page.locator('.segment label:has(input[value="fractions"])')];
     for (let i = 0; i < 50; i++) {
-      await mm.check({ force: true });
-      await inches.check({ force: true });
+      await mm.click();
+      await inches.click();
     }
     expect(await read()).toEqual(before);
     await context.close();

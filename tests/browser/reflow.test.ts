@@ -94,7 +94,7 @@ describe('for small windows, large letters, any hand', () => {
     await settle(page);
     const read = () => page.locator('[data-size] input').evaluateAll((inputs) => inputs.map((input) => (input as HTMLInputElement).value));
     const before = { figures: await read(), mark: await mark(page) };
-    for (let i = 1; i <= 99; i++) await page.locator(`.segment input[value="${['fractions', 'decimals', 'mm'][i % 3] ?? ''}"]`).check({ force: true });
+    for (let i = 1; i <= 99; i++) await page.locator(`.segment label:has(input[value="${['fractions', 'decimals', 'mm'][i % 3] ?? ''}"])`).click();
     await settle(page);
     expect({ figures: await read(), mark: await mark(page) }).toEqual(before);
     await context.close();
@@ -111,7 +111,7 @@ describe('for small windows, large letters, any hand', () => {
     texts: { ...FIRST_DRAFT.texts, ...Object.fromEntries(Object.entries(FULL).map(([key, text]) => [key, { text, units: 'in' }])) },
     picks: {
       'ends': 'round', 'wood': 'walnut', 'direction': 'conventional', 'bitKind': 'upcut', 'centreCutting': 'true', 'workZero': 'centre', 'spindle': 'hand', 'machine.heavy': 'true',
-      'options.lineNumbers': 'true', 'options.lineEndings': 'crlf', 'options.percent': 'false', 'options.comments': 'true', 'options.speedWord': 'true', 'options.spindleWait': 'seconds', 'options.end': 'M2', 'options.programUnits': 'mm',
+      'options.lineNumbers': 'true', 'options.lineEndings': 'crlf', 'options.percent': 'false', 'options.comments': 'true', 'options.speedWord': 'true', 'options.spindleWait': 'seconds', 'options.end': 'M2', 'options.programUnits': 'mm', 'coinBoard': 'none',
     },
   };
 
