@@ -65,7 +65,7 @@ describe('npm start', () => {
     const code = await start(String(port), async (address, said) => {
       expect(performance.now() - began).toBeLessThan(most);
       expect(address).toBe(`http://127.0.0.1:${port}`);
-      expect(said).toContain('No sign-in yet');
+      expect(said).toContain('Owner: ines@marrowcreek.example.com');
       expect((await fetch(address)).status).toBe(200);
     });
     expect(code).toBe(0);
