@@ -52,7 +52,9 @@ export function gluePlan(piece: PieceSpec, boardThickness: number): GluePlan {
   const pounds = (mpa: number) => (mpa / MPA_PER_PSI) * share;
   const clampHours = GLUE.clampMinutes / 60;
   const step = (name: string, dryHours: number): FinishStep => ({ name, workHours: 0.5, dryHours, recoatWithin: null, from: 'common practice' });
-  const glued = panels.map((count, n) => step(`glue ${count} ${factsOf(piece.kind).lane}s to panel ${n + 1}`, clampHours));
+  const facts = factsOf(piece.kind);
+  const strip = facts.behind ? 'strip' : facts.lane; // a shelf's lanes are its grooves, cut later
+  const glued = strips < 2 ? [] : panels.map((count, n) => step(`glue ${count} ${strip}s to panel ${n + 1}`, clampHours));
   const joined = panels.length > 1 ? [step('glue the panels to each other', GLUE.cureHours)] : [];
   const last = glued.at(-1);
   const steps = joined.length > 0 || !last ? [...glued, ...joined] : [...glued.slice(0, -1), { ...last, dryHours: GLUE.cureHours }];

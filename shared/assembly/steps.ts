@@ -36,7 +36,7 @@ export function benchSteps(piece: PieceSpec, build: Build, surface: Surface, gau
   const coloured = surface.colour === 'torch' ? [step('colour', 'Char the bare faces, brush and wipe them clean.', 'torch')]
     : surface.colour === 'stain' ? [step('colour', 'Stain the bare faces and wipe them dry.', 'rags')] : [];
   const { panels, clamps } = gluePlan(piece, build.boardThickness);
-  const glue = step('glue', `Glue the ${facts.lane}s edge to edge in ${panels.length === 1 ? 'one panel' : `${panels.length} panels, then these to each other`}, with ${clamps} clamps.`);
+  const glue = piece.lanes < 2 ? [] : [step('glue', `Glue the ${facts.behind ? 'strip' : facts.lane}s edge to edge in ${panels.length === 1 ? 'one panel' : `${panels.length} panels, then these to each other`}, with ${clamps} clamps.`)];
   const brad = facts.behind ? null : chooseBrad({ units: piece.units, boardThickness: build.boardThickness, section: piece.section }, gauge);
   const rails = facts.behind ? [] : placeRails(piece).map(({ name, length }) => {
     const places = bradPlaces(length, gauge, piece.units);
@@ -47,5 +47,5 @@ export function benchSteps(piece: PieceSpec, build: Build, surface: Surface, gau
   const battens = facts.behind || build.batten.count === 0 ? [] : [step('battens', `Fasten the ${build.batten.count} battens across the back, set to the rod.`, 'brads')];
   const finish = step('finish', 'Finish the faces and edges; keep the film thin in the grooves.', ...(OILY.includes(surface.finish) ? ['rags' as const] : []));
   const grooves = facts.behind ? [step('grooves', 'Cut the grooves on the machine from their programs.', 'router', 'always')] : [];
-  return [...coloured, glue, ...grooves, ...rails, ...battens, finish, step('coins', 'Try every kind of coin in its groove.'), step('hang', 'Fit the hardware and hang the piece.', 'hanging')];
+  return [...coloured, ...glue, ...grooves, ...rails, ...battens, finish, step('coins', 'Try every kind of coin in its groove.'), step('hang', 'Fit the hardware and hang the piece.', 'hanging')];
 }

@@ -175,6 +175,21 @@ describe('the owner', () => {
   });
 });
 
+it('the drawing goes out at true size, and the paper shows the work without contact or price', async () => {
+  const seat = await as('owner');
+  await openDayRoom(seat);
+  const { page } = seat;
+  const [saved] = await Promise.all([page.waitForEvent('download'), page.locator('[data-svg]').click()]);
+  const svg = readFileSync(await saved.path(), 'utf8');
+  expect([saved.suggestedFilename(), svg.match(/<svg [^>]*>/)?.[0]]).toEqual(['42-coins-for-the-day-room.svg', expect.stringContaining('width="28in" height="16.25in" viewBox="0 0 28 16.25"')]);
+  expect(svg.match(/<circle /g)).toHaveLength(41);
+  await page.emulateMedia({ media: 'print' });
+  const paper = await page.locator('body').innerText();
+  for (const there of ['short stripe', 'rail A top', '18 gauge', 'Oily rags']) expect(paper).toContain(there);
+  for (const secret of ['Prewitt', 'halvard@', 'Cost of the wood', '41.67']) expect(paper).not.toContain(secret);
+  await seat.context.close();
+});
+
 describe('the shop hand', () => {
   it('sees tally, piece, cut list and steps, ticks one off, and finds no contact and no price on the page', async () => {
     const seat = await as('hand');
