@@ -16,7 +16,7 @@ function fill(folder: string, { programs, rails }: { readonly programs: number; 
     const columns = file.prepare(`SELECT name FROM pragma_table_info('${table}')`).pluck().all().map(String);
     return file.prepare(`INSERT INTO ${table} (${columns.join(', ')}) SELECT ${columns.map((column) => changes[column] ?? column).join(', ')} FROM ${table} ORDER BY rowid LIMIT 1`);
   };
-  const rail = copyOf('rails', { id: '@id', name: '@name', updated_at: 'updated_at + @n' });
+  const rail = copyOf('rails', { id: '@id', name: '@name', updated_at: 'updated_at + @n', commission_id: 'NULL', label: 'NULL' });
   const revision = copyOf('rail_revisions', { id: '@id', rail_id: '@id' });
   const program = copyOf('rail_programs', { id: '@id', mark: '@mark', sha256: '@id', made_at: 'made_at + @n', rail_id: '@rail' });
   file.transaction(() => {

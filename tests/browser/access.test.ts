@@ -49,7 +49,7 @@ describe('for everyone, on every screen', () => {
       await page.keyboard.press('Tab');
     }
     expect(order).toEqual([
-      'railLength', 'stopMargin', 'length', 'coinDiameter', 'coinThickness', 'width', 'depth', 'railThickness', 'railWidth',
+      'railLength', 'stopMargin', 'length', 'coinDiameter', 'coinThickness', null, 'width', 'depth', 'railThickness', 'railWidth',
       'bitDiameter', 'flutes', 'spindleSpeed', 'feed', 'plungeFeed', 'stepdown',
     ]);
     await box(page, 'railLength').focus();

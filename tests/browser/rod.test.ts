@@ -187,11 +187,11 @@ describe('the coin in the section', () => {
     const { page, context } = await openPage(browser, url);
     const before = await mark(page);
     const words = page.locator('[data-coin-words]');
-    expect(await words.textContent()).toContain('58.');
+    expect(await words.textContent()).toContain('23.5° on the board');
     const drawn = await page.locator('[data-coin]').getAttribute('points');
     await type(page, 'coinThickness', '0.35');
     await settle(page);
-    expect(await words.textContent()).not.toContain('58.');
+    expect(await words.textContent()).not.toContain('23.5°');
     expect(await page.locator('[data-coin]').getAttribute('points')).not.toBe(drawn);
     await type(page, 'coinDiameter', '2');
     await settle(page);
@@ -207,6 +207,11 @@ describe('the coin in the section', () => {
     await ready(there.page);
     expect(await box(there.page, 'coinDiameter').inputValue()).toBe('2');
     expect(await box(there.page, 'coinThickness').inputValue()).toBe('0.157');
+    expect(await mark(there.page)).toBe(before);
+    await there.page.getByLabel('board behind').uncheck();
+    expect(await there.page.locator('[data-board]').count()).toBe(0);
+    expect(await there.page.locator('[data-coin-words]').textContent()).toContain('stand a board behind it');
+    await settle(there.page);
     expect(await mark(there.page)).toBe(before);
     for (const one of [context, there.context]) await one.close();
   });
