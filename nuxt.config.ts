@@ -82,6 +82,7 @@ export default defineNuxtConfig({
   hooks: {
     // What a page only fetches when it is asked for is not fetched before: most visitors ask for little of it.
     'build:manifest'(manifest) {
+      offline.note(manifest);
       for (const chunk of Object.values(manifest)) chunk.prefetch = false;
       // These stand in the page as it comes; their code is fetched by the first touch (useTouched), or never.
       const part = (path: string) => Object.values(manifest).find(({ src }) => src?.endsWith(path));
