@@ -35,7 +35,7 @@ async function openAtCut(browser, address, solid) {
   const page = await browser.newPage({ viewport: { width: 1440, height: 900 } });
   await page.goto(address);
   await page.waitForFunction(() => document.documentElement.dataset.ready === 'yes');
-  await page.locator('main[aria-busy="false"]').waitFor({ state: 'attached', timeout: 120_000 });
+  await page.locator('.rail[aria-busy="false"]').waitFor({ state: 'attached', timeout: 120_000 });
   await page.locator('.play').scrollIntoViewIfNeeded();
   await page.getByRole('slider', { name: 'Time in the program' }).first().waitFor();
   if (solid) await page.locator('canvas').first().waitFor({ timeout: 120_000 });
