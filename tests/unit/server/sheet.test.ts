@@ -1,4 +1,3 @@
-import { writeFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { piecesOf, printable } from '#server/papers/paper';
 import { sheetPdf } from '#server/papers/sheet';
@@ -12,7 +11,6 @@ const sheet = (paper: 'letter' | 'a4', number = 0, held = 2) =>
 describe('the setup sheet as a PDF', () => {
   it.each([['letter', 215.9, 279.4], ['a4', 210, 297]] as const)('%s: one page, with bars of 4 in and 100 mm', async (paper, width, height) => {
     const pdf = await sheet(paper);
-    if (process.env.KEEP) writeFileSync(`/tmp/sheet-${paper}.pdf`, pdf);
     const pages = pagesOf(pdf);
     expect(pages).toHaveLength(1);
     const [page] = pages;
@@ -24,7 +22,6 @@ describe('the setup sheet as a PDF', () => {
 
   it.each([[0, 0], [3, 0], [3, 1], [1, 2]])('rail %i held in way %i: nothing is drawn off the paper', async (number, held) => {
     const pdf = await sheet('letter', number, held);
-    if (process.env.KEEP) writeFileSync(`/tmp/sheet-${number}-${held}.pdf`, pdf);
     const [page] = pagesOf(pdf);
     const points = page?.paths.flatMap(({ lines }) => lines.flatMap(({ from, to }) => [from, to])) ?? [];
     expect(points.length).toBeGreaterThan(200);
