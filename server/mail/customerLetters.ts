@@ -1,6 +1,6 @@
 import { PROGRESS_WORDS, type ProgressMail } from '#shared/commission/stagesMail';
 import { LINK_RULES } from '#shared/quote/access';
-import type { Letter } from './letters';
+import { type Letter, escape } from './letters';
 
 /** Whose letter it is, and of which commission. */
 export interface About {
@@ -19,7 +19,6 @@ const LONGEST_SUBJECT = 120; // characters that a list of mails shows at most
 
 /** What people typed, as it may stand in a line. */
 const oneLine = (text: string) => text.replace(UNSEEN, ' ').replace(/ {2,}/g, ' ').trim();
-const escape = (text: string) => text.replace(/[&<>"']/g, (sign) => `&#${sign.charCodeAt(0)};`);
 
 function asText(part: Part): string {
   if (typeof part === 'string') return oneLine(part);

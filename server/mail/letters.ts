@@ -5,7 +5,8 @@ export interface Letter {
   readonly html: string;
 }
 
-const escape = (text: string) => text.replace(/[&<>"']/g, (sign) => `&#${sign.charCodeAt(0)};`);
+/** Words that people typed, as they may stand in HTML. */
+export const escape = (text: string) => text.replace(/[&<>"']/g, (sign) => `&#${sign.charCodeAt(0)};`);
 
 /** A letter from its paragraphs; the link stands on a line of its own in both forms. */
 function letter(subject: string, before: readonly string[], link: string | null, after: readonly string[]): Letter {

@@ -26,8 +26,8 @@ export async function signUp({ shop, name, email, password, drawing }: z.output<
     await queued(null, email, letters.alreadyHere({ name, origin })).run();
     return;
   }
-  const { secret, write } = newToken('sign-up', { payload: { shop, name, email, passwordHash, ...(drawing && { drawing }) } });
-  await allOrNothing(useDatabase(), [write, queued(null, email, letters.confirm({ name, shop, link: `${origin}/welcome#${secret}` }))]);
+  const { secret, writes } = newToken('sign-up', { payload: { shop, name, email, passwordHash, ...(drawing && { drawing }) } });
+  await allOrNothing(useDatabase(), [...writes, queued(null, email, letters.confirm({ name, shop, link: `${origin}/welcome#${secret}` }))]);
 }
 
 /** Ends a sign-up: makes the shop and its owner. Null where the link is used up. */
@@ -66,8 +66,8 @@ export async function signIn(email: string, password: string) {
 export async function forgotPassword(email: string, { origin }: Site): Promise<void> {
   const person = await findByEmail(email);
   if (!person) return;
-  const { secret, write } = newToken('reset', { shopId: person.shopId, personId: person.id });
-  await allOrNothing(useDatabase(), [dropTokens('reset', person.id), write, queued(person.shopId, email, letters.reset({ name: person.name, link: `${origin}/new-password#${secret}` }))]);
+  const { secret, writes } = newToken('reset', { shopId: person.shopId, personId: person.id });
+  await allOrNothing(useDatabase(), [dropTokens('reset', person.id), ...writes, queued(person.shopId, email, letters.reset({ name: person.name, link: `${origin}/new-password#${secret}` }))]);
 }
 
 /** Sets a password by the link from a mail; false where the link is used up. */
@@ -109,8 +109,8 @@ export async function invite(by: { readonly id: string; readonly shopId: string;
     await allOrNothing(useDatabase(), [queued(by.shopId, email, letters.alreadyElsewhere({ name, shop })), deed(by, 'invited', name)]);
     return;
   }
-  const { secret, write } = newToken('invite', { shopId: by.shopId, payload: { name, email } });
-  await allOrNothing(useDatabase(), [write, queued(by.shopId, email, letters.invite({ name, shop, from: by.name, link: `${origin}/join#${secret}` })), deed(by, 'invited', name)]);
+  const { secret, writes } = newToken('invite', { shopId: by.shopId, payload: { name, email } });
+  await allOrNothing(useDatabase(), [...writes, queued(by.shopId, email, letters.invite({ name, shop, from: by.name, link: `${origin}/join#${secret}` })), deed(by, 'invited', name)]);
 }
 
 /** Takes an invitation: makes the shop hand. Null where the link is used up. */

@@ -10,12 +10,8 @@ import { useDatabase } from '../db/shop';
 import { newId } from '../utils/newId';
 import { findBit } from './bits';
 import { firstOffsOf } from './cuts';
-import { deed } from './deeds';
+import { type Actor, deed } from './deeds';
 
-interface Actor {
-  readonly id: string;
-  readonly shopId: string;
-}
 type FoundBit = NonNullable<Awaited<ReturnType<typeof findBit>>>;
 
 /** One width of a first-off, to be told apart from the others of its cut: `key` is the cut's id and the place on the slot. */

@@ -5,13 +5,8 @@ import { bitCorrections, bitReplacements, cuts } from '../db/schema';
 import { allOrNothing } from '../db/client';
 import { useDatabase } from '../db/shop';
 import { newId } from '../utils/newId';
-import { deed } from './deeds';
+import { type Actor, deed } from './deeds';
 import { shopBits } from './records';
-
-interface Actor {
-  readonly id: string;
-  readonly shopId: string;
-}
 
 /** Since when the bit in the collet is this one; the beginning where it was never replaced. */
 async function since(shopId: string, bitId: string): Promise<Date> {

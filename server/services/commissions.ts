@@ -8,13 +8,8 @@ import { allOrNothing } from '../db/client';
 import { benchTicks, commissions, people, pieceRevisions } from '../db/schema';
 import { useDatabase } from '../db/shop';
 import { newId } from '../utils/newId';
-import { deed } from './deeds';
+import { type Actor, deed } from './deeds';
 import { type ListShape, pageOf } from './lists';
-
-export interface Actor {
-  readonly id: string;
-  readonly shopId: string;
-}
 
 const SHAPE: ListShape = {
   id: commissions.id, shopId: commissions.shopId, sorts: { name: commissions.name, updated: commissions.updatedAt }, first: ['updated', 'desc'], search: commissions.name, status: commissions.stage,

@@ -7,14 +7,9 @@ import { cutEvent, moveRail } from '#shared/shop/railStatus';
 import { allOrNothing } from '../db/client';
 import { bits, cuts, machines, people, railPrograms, rails } from '../db/schema';
 import { useDatabase } from '../db/shop';
-import { deed } from './deeds';
+import { type Actor, deed } from './deeds';
 import { type ListShape, pageOf } from './lists';
 import { findRailProgram } from './railPrograms';
-
-interface Actor {
-  readonly id: string;
-  readonly shopId: string;
-}
 
 /** A clock at the bench may be a little fast. */
 const LATEST = 10 * 60_000; // ms ahead of ours

@@ -4,8 +4,14 @@ import { deeds, people } from '../db/schema';
 import { useDatabase } from '../db/shop';
 import { type ListShape, pageOf } from './lists';
 
+/** Whoever does something in a shop. */
+export interface Actor {
+  readonly id: string;
+  readonly shopId: string;
+}
+
 /** The write that notes who did what; it goes with the deed itself, all or nothing. */
-export function deed(by: { readonly id: string | null; readonly shopId: string }, what: string, subject: string) {
+export function deed(by: Actor, what: string, subject: string) {
   return useDatabase().insert(deeds).values({ shopId: by.shopId, personId: by.id, what, subject, at: new Date() });
 }
 

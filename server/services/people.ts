@@ -3,7 +3,7 @@ import type { PersonStatus, Role } from '#shared/types/people';
 import { allOrNothing } from '../db/client';
 import { passkeys, people, shops, tokens } from '../db/schema';
 import { useDatabase } from '../db/shop';
-import { deed } from './deeds';
+import { type Actor, deed } from './deeds';
 
 /** A person who may act: not suspended, not removed. */
 export async function findActive(id: string) {
@@ -42,11 +42,6 @@ export async function personIn(shopId: string, id: string) {
   const [person] = await useDatabase().select({ id: people.id, name: people.name, email: people.email, role: people.role, status: people.status })
     .from(people).where(and(eq(people.shopId, shopId), eq(people.id, id), ne(people.status, 'removed')));
   return person ?? null;
-}
-
-interface Actor {
-  readonly id: string;
-  readonly shopId: string;
 }
 
 /** Suspends a person, or lets them back in; their sessions end either way. */

@@ -9,8 +9,8 @@ import { type Write, allOrNothing } from '../db/client';
 import { railRevisions, rails } from '../db/schema';
 import { useDatabase } from '../db/shop';
 import { problem } from '../utils/problem';
-import { type Actor, newestWork } from './commissions';
-import { deed } from './deeds';
+import { newestWork } from './commissions';
+import { type Actor, deed } from './deeds';
 import { made } from './pieceRevisions';
 import { newRail, newRevision, railAway } from './rails';
 

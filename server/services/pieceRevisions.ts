@@ -7,8 +7,8 @@ import { allOrNothing, isTaken } from '../db/client';
 import { commissions, cuts, madeSteps, people, pieceRevisions, railPrograms, rails } from '../db/schema';
 import { useDatabase } from '../db/shop';
 import { newId } from '../utils/newId';
-import { type Actor, newestWork } from './commissions';
-import { deed } from './deeds';
+import { newestWork } from './commissions';
+import { type Actor, deed } from './deeds';
 
 /** Every revision of a commission's work, the newest first: who saved it and when. */
 export async function workRevisions(shopId: string, commissionId: string) {

@@ -9,15 +9,11 @@ import { people, railPrograms, rails } from '../db/schema';
 import { useDatabase } from '../db/shop';
 import { newId } from '../utils/newId';
 import { findBit } from './bits';
-import { deed } from './deeds';
+import { type Actor, deed } from './deeds';
 import { type ListShape, pageOf } from './lists';
 import { shopMachines, shopWoods } from './records';
 
 type GoodProgram = Extract<MadeProgram, { readonly ok: true }>;
-interface Actor {
-  readonly id: string;
-  readonly shopId: string;
-}
 
 /** The shop's records that a program is to be made with, or the name of the field that names none of them. */
 export async function recordsFor(shopId: string, { machineId, bitId, holding, woodId }: CutWithInput): Promise<CutWith | { readonly missing: keyof CutWithInput }> {

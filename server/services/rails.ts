@@ -6,13 +6,8 @@ import { type Write, allOrNothing, isTaken } from '../db/client';
 import { people, railRevisions, rails } from '../db/schema';
 import { useDatabase } from '../db/shop';
 import { newId } from '../utils/newId';
-import { deed } from './deeds';
+import { type Actor, deed } from './deeds';
 import { type ListShape, pageOf } from './lists';
-
-interface Actor {
-  readonly id: string;
-  readonly shopId: string;
-}
 
 const SHAPE: ListShape = {
   id: rails.id, shopId: rails.shopId, sorts: { name: rails.name, updated: rails.updatedAt }, first: ['updated', 'desc'], search: rails.name, status: rails.status,

@@ -4,13 +4,9 @@ import { allOrNothing } from '../db/client';
 import { type RecordTable, bits, machines, woods } from '../db/schema';
 import { useDatabase } from '../db/shop';
 import { newId } from '../utils/newId';
-import { deed } from './deeds';
+import { type Actor, deed } from './deeds';
 import { type ListShape, pageOf } from './lists';
 
-interface Actor {
-  readonly id: string;
-  readonly shopId: string;
-}
 interface Named {
   readonly name: string;
 }

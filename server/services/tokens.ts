@@ -6,17 +6,18 @@ import { hashOf, newSecret } from '../utils/newId';
 type TokenKind = (typeof TOKEN_KINDS)[number];
 
 /** How long a link works, in minutes. */
-const LIFETIMES: Readonly<Record<TokenKind, number>> = { 'sign-up': 24 * 60, 'reset': 60, 'invite': 7 * 24 * 60, 'passkey': 5 };
+const LIFETIMES: Readonly<Record<TokenKind, number>> = { 'sign-up': 24 * 60, 'reset': 60, 'invite': 7 * 24 * 60 };
 
-/** A link's secret, and the write that keeps its hash. */
+/** A link's secret, and the writes that keep its hash and drop all that are too old: nothing typed for them stays longer than it is of use. */
 export function newToken(kind: TokenKind, of: { readonly shopId?: string; readonly personId?: string; readonly payload?: Readonly<Record<string, string>> }) {
   const secret = newSecret();
   const now = Date.now();
-  const write = useDatabase().insert(tokens).values({
+  const database = useDatabase();
+  const write = database.insert(tokens).values({
     hash: hashOf(secret), kind, shopId: of.shopId ?? null, personId: of.personId ?? null, payload: of.payload ?? {},
     createdAt: new Date(now), expiresAt: new Date(now + LIFETIMES[kind] * 60_000),
   });
-  return { secret, write };
+  return { secret, writes: [database.delete(tokens).where(lte(tokens.expiresAt, new Date(now))), write] };
 }
 
 /** What a secret stands for, or null where it is used, too old or made up. */
@@ -32,7 +33,6 @@ export async function useToken(kind: TokenKind, secret: string): Promise<boolean
   return gone.length === 1;
 }
 
-/** The write that drops a person's other links of a kind, and all that are too old. */
+/** The write that drops a person's other links of a kind. */
 export const dropTokens = (kind: TokenKind, personId: string) =>
   useDatabase().delete(tokens).where(and(eq(tokens.kind, kind), eq(tokens.personId, personId)));
-export const dropOldTokens = () => useDatabase().delete(tokens).where(lte(tokens.expiresAt, new Date()));

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { objectError } from '../measure/messages';
+import { CONTROL, objectError } from '../measure/messages';
 
 // What people send about their accounts: one schema per request, for the form and for the server.
 
@@ -8,9 +8,6 @@ export const SHORTEST_PASSWORD = 12;
 /** Far above any phrase; hashing longer ones costs us and gains nobody. */
 const LONGEST_PASSWORD = 200;
 const LONGEST_NAME = 80;
-
-// eslint-disable-next-line no-control-regex -- refusing control characters is what this is for
-const CONTROL = /[\u0000-\u001f\u007f-\u009f\u2028\u2029]/;
 
 const line = (what: string, most = LONGEST_NAME) => z.string({ error: `Give ${what} as text.` }).trim()
   .min(1, { error: `Give ${what}.` })

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { STYLES, type Style } from '../coin/fit';
 import { LENGTH_HELP, formatSize, lengthIn, parseLength } from '../measure/length';
-import { objectError } from '../measure/messages';
+import { capital, objectError } from '../measure/messages';
 import { UNITS, type Units, byUnits } from '../measure/units';
 import { FLAG_ORDER, type Outline, PIECE_KINDS, type PieceKind, factsOf } from './kinds';
 
@@ -42,7 +42,6 @@ const WORDS = {
 } as const;
 type Field = keyof typeof WORDS;
 
-const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1);
 const size = (field: Field) => z.union([z.number(), z.string()], { error: (issue) => (issue.input === undefined ? `${capital(WORDS[field])} is missing. ${LENGTH_HELP}` : `${capital(WORDS[field])} is no size. ${LENGTH_HELP}`) });
 const whole = (what: string, most: number) => z.number({ error: `Give ${what} as a whole number, 1 to ${most}.` }).int({ error: `Give ${what} as a whole number, 1 to ${most}.` }).min(1, { error: `Give ${what} as 1 to ${most}.` }).max(most, { error: `Give ${what} as 1 to ${most}.` });
 

@@ -5,8 +5,6 @@ import { figureField, wrong } from './fields';
 /** How a cut came out. */
 export const OUTCOMES = ['well', 'spoiled'] as const;
 
-/** Places that a first-off is measured at; more may be. */
-export const FIRST_OFF_PLACES = 3;
 const MOST_PLACES = 12;
 
 const measured = (words: string) => z.array(figureField(words, 0.0001, 6096, "of the drawing's units"), { error: wrong(words, 'Use a list of figures.') })

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { LENGTH_HELP, formatSize, lengthIn, parseLength } from '../measure/length';
-import { objectError } from '../measure/messages';
+import { CONTROL, capital, objectError, quote } from '../measure/messages';
 import { UNITS, type Units, byUnits } from '../measure/units';
 
 /** What is wrong with one field of a shop's record, and what would work. */
@@ -8,15 +8,6 @@ export interface ShopProblem {
   readonly field: string;
   readonly message: string;
 }
-
-/** What the message quotes of a value that cannot be used; long texts are cut. */
-function quote(value: unknown): string {
-  if (typeof value === 'string') return `"${value.slice(0, 40)}"`;
-  if (Array.isArray(value)) return 'a list';
-  return typeof value === 'object' && value !== null ? 'an object' : String(value);
-}
-
-const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1);
 
 /** `Flute count is 0. Use 1 to 8.`, or that the field is missing. */
 export const wrong = (words: string, help: string) => (issue: { readonly input?: unknown }) =>
@@ -88,8 +79,6 @@ export const ROOM = 'The greatest chip load is no more than the least. Give leas
 
 /** Longest name of a record: one line of a list and of a sheet. */
 const LONGEST_NAME = 60;
-// eslint-disable-next-line no-control-regex -- refusing control characters is what this is for
-const CONTROL = /[\u0000-\u001f\u007f-\u009f\u2028\u2029]/;
 
 /** The name that the shop calls a record by. */
 export const nameField = (words: string) =>

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { LENGTH_HELP, type WrittenLength, formatDecimal, lengthIn, parseLength } from '../measure/length';
 import { UNITS, byUnits } from '../measure/units';
-import { objectError } from '../measure/messages';
+import { CONTROL, capital, objectError, quote } from '../measure/messages';
 import { DEFAULT_OPTIONS, type ProgramOptions, programOptionsSchema } from '../program/options';
 import { WOODS } from '../wood/woods';
 import { type GivenSpec, fillDefaults } from './defaults';
@@ -18,15 +18,6 @@ export interface SlotRequest {
   /** What was converted on the way in, in words: `Slot width: 9 mm is 0.3543 in.` */
   readonly notes: readonly string[];
 }
-
-/** What the message quotes of a value that cannot be used; long texts are cut. */
-function quote(value: unknown): string {
-  if (typeof value === 'string') return `"${value.slice(0, 40)}"`;
-  if (Array.isArray(value)) return 'a list';
-  return typeof value === 'object' && value !== null ? 'an object' : String(value);
-}
-
-const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1);
 
 const missing = (field: keyof SlotSpec, help: string) => (issue: { readonly input?: unknown }) =>
   issue.input === undefined
@@ -66,8 +57,6 @@ const machineSchema = z.strictObject({
 
 /** A name goes into the program's header and its file name; longer ones would not fit a line there. */
 const LONGEST_NAME = 60;
-// eslint-disable-next-line no-control-regex -- refusing control characters is what this is for
-const CONTROL = /[\u0000-\u001f\u007f-\u009f\u2028\u2029]/;
 
 const shape = {
   units: choice('units', UNITS),

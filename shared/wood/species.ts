@@ -1,4 +1,4 @@
-import { WOODS, type Wood } from './woods';
+import { type Wood } from './woods';
 
 /**
  * A wood's figures from the Wood Handbook (FPL-GTR-190, USDA Forest Service, 2010): shrinkage in % from green to
@@ -54,6 +54,3 @@ export function densityOf(wood: Wood): number {
   if (wood === 'hardwood') return SPECIES['white-oak'].specificGravity * 1.12;
   return (figuresOf(wood)?.specificGravity ?? SPECIES['white-oak'].specificGravity) * 1.12;
 }
-
-/** Woods whose movement is known. */
-export const MOVING_WOODS: readonly Wood[] = WOODS.filter((wood) => STANDS_FOR[wood] !== null);

@@ -39,9 +39,9 @@ export const passkeys = sqliteTable('passkeys', {
   createdAt: time('created_at').notNull(),
 }, (table) => [index('passkeys_person').on(table.personId)]);
 
-export const TOKEN_KINDS = ['sign-up', 'reset', 'invite', 'passkey'] as const;
+export const TOKEN_KINDS = ['sign-up', 'reset', 'invite'] as const;
 
-/** What a link in a mail or a half-done passkey stands for; of the secret itself only the hash is kept. */
+/** What a link in a mail stands for; of the secret itself only the hash is kept. */
 export const tokens = sqliteTable('tokens', {
   hash: text('hash').primaryKey(),
   kind: text('kind', { enum: TOKEN_KINDS }).notNull(),
