@@ -1,4 +1,4 @@
-import { type Wood } from './woods';
+import type { Wood } from './woods';
 
 /**
  * A wood's figures from the Wood Handbook (FPL-GTR-190, USDA Forest Service, 2010): shrinkage in % from green to
